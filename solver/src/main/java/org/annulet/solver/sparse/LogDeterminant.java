@@ -11,7 +11,9 @@ public record LogDeterminant(double logModulus, double phase) {
   /** The product of two determinants. */
   public LogDeterminant times(LogDeterminant other) {
     double p = phase + other.phase;
+    double reduced = p - 2 * Math.PI * Math.ceil((p - Math.PI) / (2 * Math.PI));
+    // Rounding may leave the last digit of π too much.
     return new LogDeterminant(
-        logModulus + other.logModulus, p - 2 * Math.PI * Math.ceil((p - Math.PI) / (2 * Math.PI)));
+        logModulus + other.logModulus, Math.max(-Math.PI, Math.min(Math.PI, reduced)));
   }
 }
