@@ -1,0 +1,60 @@
+package org.annulet.cases.cli;
+
+import java.io.PrintStream;
+import java.util.Locale;
+import org.annulet.cases.study.Progress;
+
+/** Where the command line speaks: results on standard output, everything else on standard error. */
+final class Console {
+  private final PrintStream out;
+  private final PrintStream err;
+  private final boolean terminal;
+  private boolean quiet;
+  private boolean lineOpen;
+
+  Console(PrintStream out, PrintStream err, boolean terminal) {
+    this.out = out;
+    this.err = err;
+    this.terminal = terminal;
+  }
+
+  void beQuiet() {
+    quiet = true;
+  }
+
+  /** A result the user asked for; left out when quiet. */
+  void result(String text) {
+    endLine();
+    if (!quiet) {
+      out.println(text);
+      out.flush();
+    }
+  }
+
+  /** Something that is wrong; always said. */
+  void fault(String text) {
+    endLine();
+    err.println(text);
+    err.flush();
+  }
+
+  /** One line on the terminal that is overwritten by the next; nothing where standard error is no terminal. */
+  Progress progress() {
+    if (!terminal || quiet) {
+      return Progress.SILENT;
+    }
+    return (what, done, of) -> {
+      String line = String.format(Locale.ROOT, "  %s %d/%d", what, done, of);
+      err.print("\r" + line + " ".repeat(Math.max(0, 60 - line.length())));
+      err.flush();
+      lineOpen = true;
+    };
+  }
+
+  private void endLine() {
+    if (lineOpen) {
+      err.print("\r" + " ".repeat(62) + "\r");
+      lineOpen = false;
+    }
+  }
+}
