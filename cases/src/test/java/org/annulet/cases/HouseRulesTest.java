@@ -82,7 +82,8 @@ class HouseRulesTest {
           .orShould()
           .callMethod(Throwable.class, "printStackTrace", PrintStream.class);
 
-  @ArchTest static final ArchRule faultsHaveTheirOwnKind = NO_CLASSES_SHOULD_THROW_GENERIC_EXCEPTIONS;
+  @ArchTest
+  static final ArchRule faultsHaveTheirOwnKind = NO_CLASSES_SHOULD_THROW_GENERIC_EXCEPTIONS;
 
   @ArchTest
   static void everyPackageSaysWhatItIs(JavaClasses all) {
@@ -100,7 +101,8 @@ class HouseRulesTest {
   private static boolean hasDocumentedPackage(String name) {
     String module = name.split("\\.")[2];
     java.nio.file.Path info =
-        java.nio.file.Path.of("..", module, "src/main/java", name.replace('.', '/'), "package-info.java");
+        java.nio.file.Path.of(
+            "..", module, "src/main/java", name.replace('.', '/'), "package-info.java");
     return java.nio.file.Files.isRegularFile(info);
   }
 

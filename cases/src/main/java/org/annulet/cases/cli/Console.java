@@ -38,7 +38,10 @@ final class Console {
     err.flush();
   }
 
-  /** One line on the terminal that is overwritten by the next; nothing where standard error is no terminal. */
+  /**
+   * One line on the terminal that is overwritten by the next; nothing where standard error is no
+   * terminal.
+   */
   Progress progress() {
     if (!terminal || quiet) {
       return Progress.SILENT;
