@@ -22,6 +22,6 @@ public final class SparseSolver {
               + pattern.size()
               + "], one place for each unknown; or be null");
     }
-    return new UpLookingAnalysis(pattern);
+    return new MultifrontalAnalysis(pattern, coordinates);
   }
 }
