@@ -4,7 +4,7 @@ package org.annulet.solver.medium;
  * What the gas of a zone is: from temperature and mean pressure to γ, sound speed and density, with
  * ρc² = γp̄. Implementations are immutable.
  */
-public sealed interface Gas permits Mixture, PerfectGas, GivenGas {
+public sealed interface Gas permits Mixture, PerfectGas, UniformGas {
   /**
    * Ratio of heat capacities.
    *

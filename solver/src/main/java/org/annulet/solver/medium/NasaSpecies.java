@@ -1,6 +1,7 @@
 package org.annulet.solver.medium;
 
-import java.util.Locale;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.Map;
 
 /**
@@ -115,19 +116,26 @@ public final class NasaSpecies {
   private double[] range(double t) {
     if (!(t >= bounds[0] && t <= bounds[bounds.length - 1])) {
       throw new IllegalArgumentException(
-          String.format(
-              Locale.ROOT,
-              "%s at %.6g K: the gas data of this species hold from %.6g to %.6g K; give R and γ, or"
-                  + " c and ρ, where the gas is outside",
-              name,
-              t,
-              bounds[0],
-              bounds[bounds.length - 1]));
+          name
+              + " at "
+              + text(t)
+              + " K: the gas data of this species hold from "
+              + text(bounds[0])
+              + " to "
+              + text(bounds[bounds.length - 1])
+              + " K; give R and γ, or c and ρ, where the gas is outside");
     }
     int r = 0;
     while (r < coefficients.length - 1 && t > bounds[r + 1]) {
       r++;
     }
     return coefficients[r];
+  }
+
+  /** A number to six digits without trailing zeros, for messages. */
+  static String text(double value) {
+    return Double.isFinite(value)
+        ? new BigDecimal(value, new MathContext(6)).stripTrailingZeros().toPlainString()
+        : Double.toString(value);
   }
 }

@@ -71,8 +71,8 @@ public final class ThermoTable {
       for (int k = 0; k < values.length; k++) {
         values[k] = number(cell[k + 2], where);
       }
-      rows.computeIfAbsent(cell[0], s -> new ArrayList<>()).add(values);
-      compositions.put(cell[0], cell[1]);
+      rows.computeIfAbsent(cell[0].trim(), s -> new ArrayList<>()).add(values);
+      compositions.put(cell[0].trim(), cell[1]);
     }
     Map<String, NasaSpecies> species = new LinkedHashMap<>();
     rows.forEach((s, r) -> species.put(s, build(s, compositions.get(s), r)));
