@@ -55,7 +55,7 @@ public final class MeshCheck {
 
     @Override
     public String toString() {
-      String where = Double.isNaN(x) ? "" : String.format(Locale.ROOT, " at (%.9g, %.9g) m", x, y);
+      String where = Double.isNaN(x) ? "" : " at (" + x + ", " + y + ") m";
       return law.name().toLowerCase(Locale.ROOT).replace('_', ' ') + ": " + what + where;
     }
   }

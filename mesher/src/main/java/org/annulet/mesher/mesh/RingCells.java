@@ -13,8 +13,8 @@ package org.annulet.mesher.mesh;
  *     #SEAM}
  * @param whole the ring, periodic with N · pitch
  * @param count number of burners N
- * @param cell cell j of each node of the whole, shape [nodes of whole]; a node on a seam belongs to
- *     the cell with the smaller distance in the direction of increasing y
+ * @param cell cell j of each node of the whole, shape [nodes of whole]; a node on the seam between
+ *     cells j and j + 1 belongs to cell j, a node on a centre line is not mirrored
  * @param halfNode node of the half cell each node of the whole is an image of, shape [nodes of
  *     whole]
  * @param mirrored whether the image is mirrored (y &lt; centre line), shape [nodes of whole]

@@ -140,7 +140,7 @@ class RefinementTest {
     Mesh coarse = TestMeshes.annulus(0.3, 0.4, 1, 12);
     assertThatThrownBy(() -> UniformRefinement.of(coarse, (e, p, q) -> new double[] {9, 9}))
         .isInstanceOf(IllegalArgumentException.class)
-        .hasMessageContaining("curve of edge 'inner'");
+        .hasMessageContaining("further off than the segment is long");
   }
 
   @Test

@@ -2,9 +2,11 @@ package org.annulet.mesher.mesh;
 
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
+import static org.assertj.core.api.Assertions.within;
 
 import java.util.ArrayList;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
@@ -101,11 +103,9 @@ class RingReplicationTest {
     assertThat(triangles(plain)).containsAll(triangles(whole));
     int burner = whole.zoneNames().indexOf("burner");
     assertThat(MeshMeasures.zoneAreas(whole)[burner] / MeshMeasures.zoneAreas(plain)[burner])
-        .isCloseTo(13 / 14.0, org.assertj.core.api.Assertions.within(1e-13));
-    assertThat(length(whole, "blank") / (PITCH * 1.0))
-        .isCloseTo(1, org.assertj.core.api.Assertions.within(1e-13));
-    assertThat(length(whole, "damper") / length(plain, "port"))
-        .isCloseTo(1 / 14.0, org.assertj.core.api.Assertions.within(1e-13));
+        .isCloseTo(13 / 14.0, within(1e-13));
+    assertThat(length(whole, "blank") / PITCH).isCloseTo(1, within(1e-13));
+    assertThat(length(whole, "damper") / length(plain, "port")).isCloseTo(1 / 14.0, within(1e-13));
   }
 
   @Test
@@ -146,7 +146,7 @@ class RingReplicationTest {
   }
 
   private static Set<List<Double>> triangles(Mesh mesh) {
-    Set<List<Double>> all = new java.util.HashSet<>();
+    Set<List<Double>> all = new HashSet<>();
     for (int t = 0; t < mesh.triangleCount(); t++) {
       List<Double> corners = new ArrayList<>();
       for (int k = 0; k < 3; k++) {
