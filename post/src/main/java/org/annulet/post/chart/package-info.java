@@ -1,0 +1,2 @@
+/** Charts as SVG text. No physics. */
+package org.annulet.post.chart;
