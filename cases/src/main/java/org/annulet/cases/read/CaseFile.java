@@ -1,0 +1,63 @@
+package org.annulet.cases.read;
+
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Map;
+import org.annulet.solver.modes.Window;
+
+/**
+ * A case, checked and in SI.
+ *
+ * @param file the case file
+ * @param title one line
+ * @param about free text; may be empty
+ * @param geometry shape of the gas
+ * @param gas the gas in it
+ * @param walls by edge or face name, in the order of the file; others are rigid
+ * @param flames in the order of the file; may be empty
+ * @param window where modes are wanted
+ * @param azimuthalOrders orders m wanted on a section, increasing; empty for other kinds
+ * @param outputs which files are written beside the tables
+ * @param variants the same case with some values changed; may be empty
+ * @param source where each value was read, and the text
+ */
+public record CaseFile(
+    Path file,
+    String title,
+    String about,
+    Geometry geometry,
+    Gas gas,
+    Map<String, Wall> walls,
+    List<Flame> flames,
+    Window window,
+    List<Integer> azimuthalOrders,
+    Outputs outputs,
+    List<Variant> variants,
+    CaseSource source) {
+
+  /**
+   * Which files are written beside the tables.
+   *
+   * @param fieldFiles most modes whose field is written, those growing fastest first
+   */
+  public record Outputs(int fieldFiles) {}
+
+  /**
+   * The case with some values changed.
+   *
+   * @param name of the variant
+   * @param about free text; may be empty
+   * @param caseFile the changed case; has no variants itself
+   */
+  public record Variant(String name, String about, CaseFile caseFile) {}
+
+  /** The wall of an edge or face; rigid when the case file does not name it. */
+  public Wall wall(String edge) {
+    return walls.getOrDefault(edge, new Wall.Rigid());
+  }
+
+  /** What was understood, line by line, every dimensional value in SI beside its source text. */
+  public List<String> echo() {
+    return CaseEcho.lines(this);
+  }
+}

@@ -1,0 +1,79 @@
+package org.annulet.cases.read;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+
+/**
+ * The keys of every mapping of the format whose keys are not names. A key that must be there ends
+ * in {@code !}. The JSON Schema holds the same keys under {@code $defs}; a test keeps them equal.
+ */
+enum CaseKeys {
+  CASE("annulet! title! about geometry! gas! walls flames window! outputs variants"),
+  RING("kind! burner_count! unrolled_radius mesh_size! mesh_size_at zones!"),
+  ANNULUS("name! shape! mean_radius! gap! length!"),
+  DUCTS("name! shape! mean_radius! bore area length!"),
+  SECTION("kind! mesh_size! mesh_size_at points_in points! edges! zones!"),
+  CROSS_SECTION("kind! mesh_size! mesh_size_at axial_wavenumber points_in points! edges! zones!"),
+  PLANE("kind! mesh_size! mesh_size_at depth! points_in points! edges! zones!"),
+  MESH_FILE("kind! file! plane! length_unit! depth axial_wavenumber separate_ducts"),
+  MESH_FILE_DUCTS("count! open_share!"),
+  EDGE("line arc curve"),
+  OUTLINE_ZONE("boundary! holes separate_ducts open_share"),
+  GAS("mean_pressure! zones!"),
+  GAS_ZONE("temperature gamma gas_constant mixture sound_speed density as"),
+  TEMPERATURE("profile file"),
+  PROFILE("x! temperature!"),
+  MIXTURE("fuel! equivalence_ratio!"),
+  WALL("impedance admittance choked_nozzle"),
+  CHOKED_NOZZLE("mach!"),
+  FLAME("heat_release! place! reference reference_velocity! response! staging"),
+  PLACE("sheet answer zone from to distance width"),
+  REFERENCE("edge flow_from zone from to distance width direction"),
+  RESPONSE("gain! delay!"),
+  STAGING("burners! gain delay heat_share"),
+  WINDOW("frequency! growth_rate azimuthal_orders"),
+  OUTPUTS("field_files"),
+  VARIANT("name! about set!");
+
+  /** Keys that a later version will read. */
+  static final List<String> RESERVED =
+      List.of(
+          "accuracy",
+          "dampers",
+          "two_ports",
+          "liner",
+          "reflection",
+          "impedance_table",
+          "delay_spread",
+          "response_table",
+          "studies",
+          "uncertainty",
+          "compare");
+
+  private final List<String> all = new ArrayList<>();
+  private final List<String> required = new ArrayList<>();
+
+  CaseKeys(String keys) {
+    for (String key : keys.split(" ")) {
+      String name = key.replace("!", "");
+      all.add(name);
+      if (key.endsWith("!")) {
+        required.add(name);
+      }
+    }
+  }
+
+  List<String> all() {
+    return List.copyOf(all);
+  }
+
+  List<String> required() {
+    return List.copyOf(required);
+  }
+
+  /** Name of the definition in the JSON Schema. */
+  String definition() {
+    return name().toLowerCase(Locale.ROOT);
+  }
+}

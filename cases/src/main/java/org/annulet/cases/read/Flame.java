@@ -1,0 +1,127 @@
+package org.annulet.cases.read;
+
+import java.util.List;
+import java.util.OptionalDouble;
+
+/**
+ * A flame: the same at every burner, with exceptions.
+ *
+ * @param name of the flame
+ * @param heatRelease mean, all burners together, in W
+ * @param place where the heat is released
+ * @param reference where the velocity is taken that it answers to
+ * @param referenceVelocity mean velocity there in m/s
+ * @param response (q̂/Q̄)/(û/ū)
+ * @param staging exceptions for single burners, later ones win
+ */
+public record Flame(
+    String name,
+    double heatRelease,
+    Place place,
+    Reference reference,
+    double referenceVelocity,
+    Response response,
+    List<StagedBurners> staging) {
+
+  /** Where heat is released. */
+  public sealed interface Place {}
+
+  /** How a sheet answers. */
+  public enum Answer {
+    /** One answer to the mean velocity. */
+    UNIFORM,
+    /** Each point answers to the velocity just upstream of it. */
+    POINTWISE
+  }
+
+  /**
+   * Thin, on an inner edge.
+   *
+   * @param edge name of the inner edge
+   * @param answer how it answers
+   */
+  public record Sheet(String edge, Answer answer) implements Place {}
+
+  /**
+   * Spread evenly over a zone, or the part of it between two axial coordinates.
+   *
+   * @param zone name of the zone
+   * @param from smallest x in m; −∞ for the whole zone
+   * @param to largest x in m; +∞ for the whole zone
+   * @param width on a ring the extent along the zone's mean radius around each burner's centre
+   *     line, in m; +∞ for the burner's whole share of the ring, and on other kinds
+   */
+  public record Spread(String zone, double from, double to, double width) implements Place {}
+
+  /** Where the reference velocity is taken. */
+  public sealed interface Reference {}
+
+  /**
+   * Mean velocity through an inner edge, by the consistent flux of its upstream side.
+   *
+   * @param edge name of the inner edge
+   * @param flowFrom name of the zone the mean flow comes from; velocity counts positive out of it
+   */
+  public record EdgeFlux(String edge, String flowFrom) implements Reference {}
+
+  /**
+   * Mean velocity over a patch: a zone, or the part of it between two axial coordinates.
+   *
+   * @param zone name of the zone
+   * @param from smallest x in m; −∞ for the whole zone
+   * @param to largest x in m; +∞ for the whole zone
+   * @param width as in {@link Spread}
+   * @param directionX first component of the unit vector along which velocity counts positive
+   * @param directionY second component
+   */
+  public record Patch(
+      String zone, double from, double to, double width, double directionX, double directionY)
+      implements Reference {}
+
+  /** Flame response over s. */
+  public sealed interface Response {}
+
+  /**
+   * n–τ: F(s) = n e^{−sτ}.
+   *
+   * @param gain n
+   * @param delay τ in s, not negative
+   */
+  public record GainDelay(double gain, double delay) implements Response {}
+
+  /**
+   * What differs at some burners.
+   *
+   * @param burners counted from 1
+   * @param gain n there
+   * @param delay τ there in s
+   * @param heatShare heat release there over that of the rule
+   */
+  public record StagedBurners(
+      List<Integer> burners, OptionalDouble gain, OptionalDouble delay, OptionalDouble heatShare) {}
+
+  /** Gain and delay at a burner, counted from 1, with its exceptions. */
+  public GainDelay responseAt(int burner) {
+    GainDelay rule = (GainDelay) response;
+    double gain = rule.gain();
+    double delay = rule.delay();
+    for (StagedBurners e : staging) {
+      if (e.burners().contains(burner)) {
+        gain = e.gain().orElse(gain);
+        delay = e.delay().orElse(delay);
+      }
+    }
+    return new GainDelay(gain, delay);
+  }
+
+  /** Heat release at a burner, counted from 1, over that of the rule, with its exceptions. */
+  public double heatShareAt(int burner) {
+    double share = 1;
+    for (StagedBurners e : staging) {
+      if (e.burners().contains(burner)) {
+        share = e.heatShare().orElse(share);
+      }
+    }
+    return share;
+  }
+}
