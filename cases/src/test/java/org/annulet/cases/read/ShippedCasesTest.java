@@ -45,7 +45,8 @@ class ShippedCasesTest {
   @Test
   void variants_changeOnlyWhatTheySet() {
     CaseFile c = CaseReader.read(CASES.resolve("quiet-loud-quiet")).orThrow();
-    assertThat(c.variants()).extracting(CaseFile.Variant::name)
+    assertThat(c.variants())
+        .extracting(CaseFile.Variant::name)
         .containsExactly("hydrogen_30", "hydrogen_45", "hydrogen_60");
     CaseFile last = c.variants().get(2).caseFile();
     assertThat(last.flames().get(0).responseAt(1)).isEqualTo(new Flame.GainDelay(0.7, 1.7e-3));
