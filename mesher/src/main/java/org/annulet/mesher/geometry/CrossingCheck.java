@@ -2,8 +2,10 @@ package org.annulet.mesher.geometry;
 
 import java.util.ArrayList;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import org.annulet.mesher.geometry.GeometryFault.Fault;
 import org.annulet.mesher.geometry.GeometryFault.Kind;
 
@@ -53,7 +55,7 @@ final class CrossingCheck {
     for (int s = 0; s < spans.size(); s++) {
       spread(s, cells, grid);
     }
-    java.util.Set<Long> seen = new java.util.HashSet<>();
+    Set<Long> seen = new HashSet<>();
     for (List<Integer> cell : grid.values()) {
       for (int i = 0; i < cell.size(); i++) {
         for (int k = 0; k < i; k++) {
