@@ -125,7 +125,11 @@ final class CrossingCheck {
     String what =
         a.edge == b.edge
             ? "edge '" + edges.get(a.edge).name() + "' " + word(kind) + " itself"
-            : "edges '" + edges.get(a.edge).name() + "' and '" + edges.get(b.edge).name() + "' "
+            : "edges '"
+                + edges.get(a.edge).name()
+                + "' and '"
+                + edges.get(b.edge).name()
+                + "' "
                 + (kind == Kind.CROSSING ? "cross" : "touch");
     for (Fault f : faults) {
       if (f.what().equals(what) && Math.hypot(f.x() - hit[0], f.y() - hit[1]) < 1e-6 * size) {
@@ -134,11 +138,7 @@ final class CrossingCheck {
     }
     faults.add(
         new Fault(
-            kind,
-            what,
-            hit[0],
-            hit[1],
-            "move one of them, or end both at a common point there"));
+            kind, what, hit[0], hit[1], "move one of them, or end both at a common point there"));
   }
 
   private static String word(Kind kind) {
@@ -240,9 +240,7 @@ final class CrossingCheck {
   }
 
   private static double[] chord(Span s) {
-    return new double[] {
-      s.curve.x(s.t0), s.curve.y(s.t0), s.curve.x(s.t1), s.curve.y(s.t1)
-    };
+    return new double[] {s.curve.x(s.t0), s.curve.y(s.t0), s.curve.x(s.t1), s.curve.y(s.t1)};
   }
 
   private static boolean boxesApart(double[] p, double[] q, double m) {

@@ -41,8 +41,7 @@ public final class GeometryFault extends IllegalArgumentException {
   public record Fault(Kind kind, String what, double x, double y, String mend) {
     @Override
     public String toString() {
-      String where =
-          Double.isNaN(x) ? "" : String.format(Locale.ROOT, " at (%.6g, %.6g) m", x, y);
+      String where = Double.isNaN(x) ? "" : String.format(Locale.ROOT, " at (%.6g, %.6g) m", x, y);
       return what + where + System.lineSeparator() + "    mend: " + mend;
     }
   }

@@ -29,8 +29,7 @@ public final class Outline {
   private final int[] leftZone;
   private final int[] rightZone;
 
-  Outline(
-      List<Point> points, List<Edge> edges, List<Zone> zones, int[] leftZone, int[] rightZone) {
+  Outline(List<Point> points, List<Edge> edges, List<Zone> zones, int[] leftZone, int[] rightZone) {
     this.points = List.copyOf(points);
     this.edges = List.copyOf(edges);
     this.zones = List.copyOf(zones);
@@ -80,7 +79,10 @@ public final class Outline {
     Integer e = edgeIndex.get(name);
     if (e == null) {
       throw new IllegalArgumentException(
-          "no edge '" + name + "' in the outline; edges are " + String.join(", ", edgeIndex.keySet()));
+          "no edge '"
+              + name
+              + "' in the outline; edges are "
+              + String.join(", ", edgeIndex.keySet()));
     }
     return edges.get(e);
   }
@@ -145,7 +147,9 @@ public final class Outline {
       return this;
     }
 
-    /** A smooth curve (cubic spline) through three or more points; closed if the last is the first. */
+    /**
+     * A smooth curve (cubic spline) through three or more points; closed if the last is the first.
+     */
     public Builder curve(String name, String... through) {
       edges.add(new RawEdge(name, Run.CURVE, List.of(through)));
       return this;

@@ -142,7 +142,9 @@ final class OutlineCheck {
                   "the three points of arc '" + e.name() + "' lie in one line",
                   x[1],
                   y[1],
-                  "move '" + e.through().get(1) + "' off the line, or make it a line; a full circle is"
+                  "move '"
+                      + e.through().get(1)
+                      + "' off the line, or make it a line; a full circle is"
                       + " two arcs"));
           return null;
         }

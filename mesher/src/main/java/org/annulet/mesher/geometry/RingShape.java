@@ -23,7 +23,10 @@ import org.annulet.mesher.geometry.GeometryFault.Kind;
  * @param missingBurners cells, counted from 0, whose ducts are left out
  */
 public record RingShape(
-    int burnerCount, double unrolledRadius, List<RingZone> zones, SortedSet<Integer> missingBurners) {
+    int burnerCount,
+    double unrolledRadius,
+    List<RingZone> zones,
+    SortedSet<Integer> missingBurners) {
 
   /** What a zone of the ring is. */
   public enum Shape {
@@ -42,8 +45,7 @@ public record RingShape(
    * @param width gap of an annulus or bore of a duct, in m
    * @param length in m, along x
    */
-  public record RingZone(
-      String name, Shape shape, double meanRadius, double width, double length) {
+  public record RingZone(String name, Shape shape, double meanRadius, double width, double length) {
     /** Radial height in m that multiplies the plane's area: the gap, or π·bore/4 for ducts. */
     public double gapHeight() {
       return shape == Shape.ANNULUS ? width : 0.25 * Math.PI * width;
@@ -102,8 +104,13 @@ public record RingShape(
           && z.width() >= 2 * Math.PI * z.meanRadius() / burnerCount) {
         value(
             faults,
-            burnerCount + " ducts of bore " + z.width() + " m do not fit round the mean radius "
-                + z.meanRadius() + " m" + zone,
+            burnerCount
+                + " ducts of bore "
+                + z.width()
+                + " m do not fit round the mean radius "
+                + z.meanRadius()
+                + " m"
+                + zone,
             "the pitch there is "
                 + 2 * Math.PI * z.meanRadius() / burnerCount
                 + " m; give a smaller bore, or make it an annulus");
@@ -122,7 +129,11 @@ public record RingShape(
             || zones.stream().allMatch(z -> z.shape() == Shape.DUCTS))) {
       value(
           faults,
-          "leaving out " + missingBurners.size() + " of " + burnerCount + " burners breaks the ring",
+          "leaving out "
+              + missingBurners.size()
+              + " of "
+              + burnerCount
+              + " burners breaks the ring",
           "keep at least one burner and one annulus");
     }
     if (!faults.isEmpty()) {

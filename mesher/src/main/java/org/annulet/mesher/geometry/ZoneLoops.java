@@ -186,8 +186,13 @@ final class ZoneLoops {
             same ? Kind.USE : Kind.OVERLAP,
             same
                 ? "edge '" + edges.get(e).name() + "' is used twice by zone '" + a + "'"
-                : "zones '" + a + "' and '" + b + "' lie on the same side of edge '"
-                    + edges.get(e).name() + "'",
+                : "zones '"
+                    + a
+                    + "' and '"
+                    + b
+                    + "' lie on the same side of edge '"
+                    + edges.get(e).name()
+                    + "'",
             points.get(edges.get(e).first()),
             same
                 ? "use each edge once in a zone"
@@ -228,25 +233,39 @@ final class ZoneLoops {
     if (sameZone && loop.hole && !other.hole && !inside) {
       fault(
           Kind.LEAK,
-          "a hole of zone '" + zones.get(loop.zone).name() + "' lies outside the zone, at edge '"
-              + edges.get(e).name() + "'",
+          "a hole of zone '"
+              + zones.get(loop.zone).name()
+              + "' lies outside the zone, at edge '"
+              + edges.get(e).name()
+              + "'",
           at,
           "move the hole inside, or remove it");
     } else if (sameZone && loop.hole && other.hole && inside) {
       fault(
           Kind.OVERLAP,
-          "two holes of zone '" + zones.get(loop.zone).name() + "' overlap, at edge '"
-              + edges.get(e).name() + "'",
+          "two holes of zone '"
+              + zones.get(loop.zone).name()
+              + "' overlap, at edge '"
+              + edges.get(e).name()
+              + "'",
           at,
           "remove the inner one");
     } else if (!sameZone && !loop.hole && !other.hole && inside && !inHole(other.zone, loop, p)) {
       fault(
           Kind.OVERLAP,
-          "zone '" + zones.get(loop.zone).name() + "' lies on zone '" + zones.get(other.zone).name()
-              + "', at edge '" + edges.get(e).name() + "'",
+          "zone '"
+              + zones.get(loop.zone).name()
+              + "' lies on zone '"
+              + zones.get(other.zone).name()
+              + "', at edge '"
+              + edges.get(e).name()
+              + "'",
           at,
-          "list the loop of '" + zones.get(loop.zone).name() + "' among the holes of '"
-              + zones.get(other.zone).name() + "'");
+          "list the loop of '"
+              + zones.get(loop.zone).name()
+              + "' among the holes of '"
+              + zones.get(other.zone).name()
+              + "'");
     }
   }
 

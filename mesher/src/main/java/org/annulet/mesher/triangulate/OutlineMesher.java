@@ -38,8 +38,7 @@ public final class OutlineMesher {
     return collect(outline, triangles, edgeName);
   }
 
-  private static Mesh collect(
-      Outline outline, Triangulation m, UnaryOperator<String> edgeName) {
+  private static Mesh collect(Outline outline, Triangulation m, UnaryOperator<String> edgeName) {
     Mesh.Builder b = Mesh.builder();
     int[] number = new int[m.nodeCount];
     Arrays.fill(number, -1);

@@ -8,19 +8,17 @@ import org.annulet.mesher.geometry.CurvePiece;
  * Delaunay refinement of a constrained triangulation until every gas triangle keeps its size and,
  * away from sharp corners, the least angle. The method is that of the package documentation.
  *
- * <p>Each node costs a short walk and a cavity of bounded size, so N nodes cost O(N) after the first
- * triangulation's O(n log n).
+ * <p>Each node costs a short walk and a cavity of bounded size, so N nodes cost O(N) after the
+ * first triangulation's O(n log n).
  */
 final class Refiner {
   /** Least angle in degrees. */
   static final double LEAST_ANGLE = 28;
 
-  private static final double SIN2 =
-      Math.pow(Math.sin(Math.toRadians(LEAST_ANGLE)), 2);
+  private static final double SIN2 = Math.pow(Math.sin(Math.toRadians(LEAST_ANGLE)), 2);
 
   /** Height over side of an off-centre that sees the side under one degree more than is needed. */
-  private static final double OFF_CENTRE =
-      0.5 / Math.tan(Math.toRadians(0.5 * (LEAST_ANGLE + 1)));
+  private static final double OFF_CENTRE = 0.5 / Math.tan(Math.toRadians(0.5 * (LEAST_ANGLE + 1)));
 
   /** Wanted side of new triangles, in parts of the largest allowed. */
   private static final double AIM = 0.85;
@@ -289,7 +287,11 @@ final class Refiner {
     if (mesh.nodeCount - 4 >= rules.nodeCap()) {
       throw rules.tooMany(
           String.format(
-              Locale.ROOT, "when node %d was placed at (%.6g, %.6g) m", mesh.nodeCount - 4, px, py));
+              Locale.ROOT,
+              "when node %d was placed at (%.6g, %.6g) m",
+              mesh.nodeCount - 4,
+              px,
+              py));
     }
   }
 
@@ -443,8 +445,7 @@ final class Refiner {
 
   private int commonSharp(int p, int q) {
     for (int corner : new int[] {segments.firstPoint[p], segments.lastPoint[p]}) {
-      if (sharp[corner]
-          && (corner == segments.firstPoint[q] || corner == segments.lastPoint[q])) {
+      if (sharp[corner] && (corner == segments.firstPoint[q] || corner == segments.lastPoint[q])) {
         return corner;
       }
     }

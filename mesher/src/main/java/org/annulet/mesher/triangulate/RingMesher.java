@@ -24,8 +24,8 @@ import org.annulet.mesher.mesh.RingReplication;
  *
  * <p>Edge names: {@code <zone>.upstream} and {@code <zone>.downstream} for the walls at the ends of
  * a zone, {@code <ducts>.side} for the walls of ducts; inner edges are {@code <ducts>.inlet} and
- * {@code <ducts>.outlet} between ducts and an annulus, and {@code <downstream zone>.inlet} where two
- * annuli or two rows of ducts touch.
+ * {@code <ducts>.outlet} between ducts and an annulus, and {@code <downstream zone>.inlet} where
+ * two annuli or two rows of ducts touch.
  */
 public final class RingMesher {
   private RingMesher() {}

@@ -3,8 +3,8 @@ package org.annulet.mesher.triangulate;
 import java.util.Arrays;
 
 /**
- * A biased randomised insertion order (Amenta, Choi and Rote, SoCG 2003) with a fixed hash in place of
- * chance: rounds that double in size, each sorted along Hilbert's curve.
+ * A biased randomised insertion order (Amenta, Choi and Rote, SoCG 2003) with a fixed hash in place
+ * of chance: rounds that double in size, each sorted along Hilbert's curve.
  */
 final class SpatialOrder {
   private SpatialOrder() {}

@@ -10,8 +10,8 @@ import java.util.Arrays;
  * left; {@code twin[e]} is the same side seen from the neighbour, −1 on the hull; {@code seg[e]} is
  * the segment lying on it, −1 for none.
  *
- * <p>A node is inserted by Bowyer and Watson's cavity: the triangles whose circle holds it, found by
- * a depth-first search that does not pass segments, are replaced by its star. The search changes
+ * <p>A node is inserted by Bowyer and Watson's cavity: the triangles whose circle holds it, found
+ * by a depth-first search that does not pass segments, are replaced by its star. The search changes
  * nothing until {@link #commit}, so a place can be tried and dropped.
  */
 final class Triangulation {
@@ -173,7 +173,9 @@ final class Triangulation {
     return -1;
   }
 
-  /** Finds the cavity of a place in triangle {@code t}; false if it cannot be starred from there. */
+  /**
+   * Finds the cavity of a place in triangle {@code t}; false if it cannot be starred from there.
+   */
   boolean cavityFrom(int t, double px, double py) {
     begin();
     take(t);
@@ -361,8 +363,7 @@ final class Triangulation {
     int b = start[f];
     int c = start[prev(e)];
     int d = start[prev(f)];
-    return orient(c, d, x[a], y[a]) < 0
-        && orient(c, d, x[b], y[b]) > 0;
+    return orient(c, d, x[a], y[a]) < 0 && orient(c, d, x[b], y[b]) > 0;
   }
 
   /** Flips until every side reached from the given ones is Delaunay or a segment. */

@@ -132,7 +132,8 @@ class RingMesherTest {
       }
     }
     Mesh joint = RingMesher.mesh(new RingShape(4, 0.33, List.of(a, b)), Sizing.of(0.05)).whole();
-    assertThat(joint.edgeNames()).containsExactlyInAnyOrder("a.upstream", "b.inlet", "b.downstream");
+    assertThat(joint.edgeNames())
+        .containsExactlyInAnyOrder("a.upstream", "b.inlet", "b.downstream");
   }
 
   @Test
@@ -147,8 +148,7 @@ class RingMesherTest {
 
   @Test
   void sizes_areLargestSides() {
-    RingCells cells =
-        RingMesher.mesh(RING, Sizing.builder(0.02).zone("burners", 0.008).build());
+    RingCells cells = RingMesher.mesh(RING, Sizing.builder(0.02).zone("burners", 0.008).build());
     Mesh m = cells.half();
     List<Double> sides = new ArrayList<>();
     for (int t = 0; t < m.triangleCount(); t++) {
