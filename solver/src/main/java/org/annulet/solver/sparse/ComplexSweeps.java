@@ -144,25 +144,23 @@ final class ComplexSweeps {
         tr[i] = a[tree.row[base + i]];
         ti[i] = b[tree.row[base + i]];
       }
-      int at = block;
       for (int p = begin; p < end; p++) {
         double modulus = pivotRe[p] * pivotRe[p] + pivotIm[p] * pivotIm[p];
         double re = (a[p] * pivotRe[p] + b[p] * pivotIm[p]) / modulus;
-        double im = (b[p] * pivotRe[p] - a[p] * pivotIm[p]) / modulus;
-        double rr = 0;
-        double ii = 0;
-        double ri = 0;
-        double ir = 0;
-        for (int i = 0; i < u; i++) {
-          rr += lRe[at + i] * tr[i];
-          ii += lIm[at + i] * ti[i];
-          ri += lRe[at + i] * ti[i];
-          ir += lIm[at + i] * tr[i];
-        }
-        a[p] = re - rr + ii;
-        b[p] = im - ri - ir;
-        at += u;
+        b[p] = (b[p] * pivotRe[p] - a[p] * pivotIm[p]) / modulus;
+        a[p] = re;
       }
+    }
+    int at = block;
+    for (int p = begin; p < end; p++) {
+      for (int c = 0; c < xRe.length; c++) {
+        dot(tRe[c], tIm[c], lRe, lIm, at, u, xRe[c], xIm[c], p);
+      }
+      at += u;
+    }
+    for (int c = 0; c < xRe.length; c++) {
+      double[] a = xRe[c];
+      double[] b = xIm[c];
       at = block;
       for (int p = end - 1; p >= begin; p--) {
         at -= end - p - 1;
@@ -177,5 +175,31 @@ final class ComplexSweeps {
         b[p] = im;
       }
     }
+  }
+
+  private static void dot(
+      double[] tRe,
+      double[] tIm,
+      double[] lRe,
+      double[] lIm,
+      int at,
+      int u,
+      double[] xRe,
+      double[] xIm,
+      int p) {
+    double rr = 0;
+    double ii = 0;
+    double ri = 0;
+    double ir = 0;
+    for (int i = 0; i < u; i++) {
+      double a = lRe[at + i];
+      double b = lIm[at + i];
+      rr += a * tRe[i];
+      ii += b * tIm[i];
+      ri += a * tIm[i];
+      ir += b * tRe[i];
+    }
+    xRe[p] -= rr - ii;
+    xIm[p] -= ri + ir;
   }
 }

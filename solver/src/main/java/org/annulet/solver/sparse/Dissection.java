@@ -28,6 +28,12 @@ final class Dissection {
   /** Beyond this many times √n a geometric separator is doubted and walks are tried too. */
   private static final double DOUBTFUL = 1.8;
 
+  /** Directions along which a part is shorter than this share of its length are not tried. */
+  private static final double SHORT = 0.6;
+
+  /** Directions whose cosine with the long axis exceeds this are taken for the same. */
+  private static final double ALONG = 0.98;
+
   private static final double[][] DIRECTIONS = {{1, 0}, {0, 1}, {0.6, 0.8}, {0.8, -0.6}};
 
   private final Adjacency graph;
@@ -121,29 +127,47 @@ final class Dissection {
     split(from + left, from + left + right, rightId);
   }
 
-  /** Fixed directions, scaled to the part's own extent, and its long axis. */
+  /** The long axis of the part, and those fixed directions along which it is not much shorter. */
   private double[][] directions(int from, int to) {
-    double[] mean = new double[2];
-    for (int q = from; q < to; q++) {
-      mean[0] += at[0][order[q]];
-      mean[1] += at[1][order[q]];
-    }
-    mean[0] /= to - from;
-    mean[1] /= to - from;
+    double[] x = at[0];
+    double[] y = at[1];
+    double n = to - from;
+    double x0 = x[order[from]];
+    double y0 = y[order[from]];
+    double mx = 0;
+    double my = 0;
     double xx = 0;
     double xy = 0;
     double yy = 0;
     for (int q = from; q < to; q++) {
-      double x = at[0][order[q]] - mean[0];
-      double y = at[1][order[q]] - mean[1];
-      xx += x * x;
-      xy += x * y;
-      yy += y * y;
+      double dx = x[order[q]] - x0;
+      double dy = y[order[q]] - y0;
+      mx += dx;
+      my += dy;
+      xx += dx * dx;
+      xy += dx * dy;
+      yy += dy * dy;
     }
+    xx -= mx * mx / n;
+    xy -= mx * my / n;
+    yy -= my * my / n;
     double angle = 0.5 * Math.atan2(2 * xy, xx - yy);
-    double[][] all = Arrays.copyOf(DIRECTIONS, DIRECTIONS.length + 1);
-    all[DIRECTIONS.length] = new double[] {Math.cos(angle), Math.sin(angle)};
-    return all;
+    double[] axis = {Math.cos(angle), Math.sin(angle)};
+    double longest = spread(axis, xx, xy, yy);
+    double[][] all = new double[DIRECTIONS.length + 1][];
+    int count = 0;
+    all[count++] = axis;
+    for (double[] d : DIRECTIONS) {
+      boolean same = Math.abs(d[0] * axis[0] + d[1] * axis[1]) > ALONG;
+      if (!same && spread(d, xx, xy, yy) > SHORT * SHORT * longest) {
+        all[count++] = d;
+      }
+    }
+    return Arrays.copyOf(all, count);
+  }
+
+  private static double spread(double[] d, double xx, double xy, double yy) {
+    return d[0] * d[0] * xx + 2 * d[0] * d[1] * xy + d[1] * d[1] * yy;
   }
 
   /** Ranks the part by {@link #value} into {@link #current}; false if all are the same. */

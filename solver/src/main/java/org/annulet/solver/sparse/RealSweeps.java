@@ -147,20 +147,32 @@ final class RealSweeps {
       for (int p = begin; p < end; p++) {
         xc[p] /= pivot[p];
       }
-      int at = block;
-      int p = begin;
-      for (; p + 4 <= end; p += 4) {
-        dot(tc, l, at, u, xc, p);
-        at += 4 * u;
+    }
+    int at = block;
+    int p = begin;
+    for (; p + 4 <= end; p += 4) {
+      int c = 0;
+      for (; c + 2 <= x.length; c += 2) {
+        dot(t[c], t[c + 1], l, at, u, x[c], x[c + 1], p);
+        dot(t[c], t[c + 1], l, at + 2 * u, u, x[c], x[c + 1], p + 2);
       }
-      for (; p < end; p++) {
+      if (c < x.length) {
+        dot(t[c], l, at, u, x[c], p);
+      }
+      at += 4 * u;
+    }
+    for (; p < end; p++) {
+      for (int c = 0; c < x.length; c++) {
+        double[] tc = t[c];
         double sum = 0;
         for (int i = 0; i < u; i++) {
           sum += l[at + i] * tc[i];
         }
-        xc[p] -= sum;
-        at += u;
+        x[c][p] -= sum;
       }
+      at += u;
+    }
+    for (double[] xc : x) {
       at = block;
       for (p = end - 1; p >= begin; p--) {
         at -= end - p - 1;
@@ -172,6 +184,28 @@ final class RealSweeps {
         xc[p] = sum;
       }
     }
+  }
+
+  /** Two columns of L with two right-hand sides: four independent sums hide the adder's delay. */
+  private static void dot(
+      double[] t, double[] v, double[] l, int at, int u, double[] x, double[] y, int p) {
+    double s0 = 0;
+    double s1 = 0;
+    double r0 = 0;
+    double r1 = 0;
+    int b = at + u;
+    for (int i = 0; i < u; i++) {
+      double l0 = l[at + i];
+      double l1 = l[b + i];
+      s0 += l0 * t[i];
+      s1 += l1 * t[i];
+      r0 += l0 * v[i];
+      r1 += l1 * v[i];
+    }
+    x[p] -= s0;
+    x[p + 1] -= s1;
+    y[p] -= r0;
+    y[p + 1] -= r1;
   }
 
   private static void dot(double[] t, double[] l, int at, int u, double[] x, int p) {

@@ -16,18 +16,18 @@ abstract class RefinedComplexFactor implements ComplexFactor {
   abstract void solveOnce(double[][] re, double[][] im);
 
   @Override
-  public final double solve(double[][] re, double[][] im) {
+  public final void solveUnrefined(double[][] re, double[][] im) {
+    check(re, im);
+    solveOnce(re, im);
+  }
+
+  private void check(double[][] re, double[][] im) {
     int n = pattern.size();
-    int columns = re.length;
-    if (im.length != columns) {
+    if (im.length != re.length) {
       throw new IllegalArgumentException(
-          "right-hand sides have " + columns + " real and " + im.length + " imaginary columns");
+          "right-hand sides have " + re.length + " real and " + im.length + " imaginary columns");
     }
-    double[][] restRe = new double[columns][];
-    double[][] restIm = new double[columns][];
-    double[][] xRe = new double[columns][];
-    double[][] xIm = new double[columns][];
-    for (int c = 0; c < columns; c++) {
+    for (int c = 0; c < re.length; c++) {
       if (re[c].length != n || im[c].length != n) {
         throw new IllegalArgumentException(
             "right-hand side "
@@ -40,6 +40,19 @@ abstract class RefinedComplexFactor implements ComplexFactor {
                 + n
                 + " rows");
       }
+    }
+  }
+
+  @Override
+  public final double solve(double[][] re, double[][] im) {
+    check(re, im);
+    int n = pattern.size();
+    int columns = re.length;
+    double[][] restRe = new double[columns][];
+    double[][] restIm = new double[columns][];
+    double[][] xRe = new double[columns][];
+    double[][] xIm = new double[columns][];
+    for (int c = 0; c < columns; c++) {
       restRe[c] = re[c].clone();
       restIm[c] = im[c].clone();
       xRe[c] = re[c].clone();
@@ -73,11 +86,26 @@ abstract class RefinedComplexFactor implements ComplexFactor {
     return worst;
   }
 
-  private void subtractProduct(double[] xRe, double[] xIm, double[] re, double[] im) {
-    pattern.addProduct(valuesRe, xRe, -1, re);
-    pattern.addProduct(valuesIm, xIm, 1, re);
-    pattern.addProduct(valuesRe, xIm, -1, im);
-    pattern.addProduct(valuesIm, xRe, -1, im);
+  /** y −= A x in one pass over the matrix. */
+  private void subtractProduct(double[] xRe, double[] xIm, double[] yRe, double[] yIm) {
+    for (int i = 0; i < xRe.length; i++) {
+      int last = pattern.rowStart(i + 1) - 1;
+      double pRe = xRe[i];
+      double pIm = xIm[i];
+      double sumRe = valuesRe[last] * pRe - valuesIm[last] * pIm;
+      double sumIm = valuesRe[last] * pIm + valuesIm[last] * pRe;
+      for (int q = pattern.rowStart(i); q < last; q++) {
+        int j = pattern.column(q);
+        double a = valuesRe[q];
+        double b = valuesIm[q];
+        sumRe += a * xRe[j] - b * xIm[j];
+        sumIm += a * xIm[j] + b * xRe[j];
+        yRe[j] -= a * pRe - b * pIm;
+        yIm[j] -= a * pIm + b * pRe;
+      }
+      yRe[i] -= sumRe;
+      yIm[i] -= sumIm;
+    }
   }
 
   private static double norm(double[] re, double[] im) {

@@ -14,20 +14,36 @@ abstract class RefinedRealFactor implements RealFactor {
   abstract void solveOnce(double[][] b);
 
   @Override
+  public final void solveUnrefined(double[]... b) {
+    check(b);
+    solveOnce(b);
+  }
+
+  private void check(double[][] b) {
+    for (int c = 0; c < b.length; c++) {
+      if (b[c].length != pattern.size()) {
+        throw new IllegalArgumentException(
+            "right-hand side "
+                + c
+                + " has "
+                + b[c].length
+                + " entries, the matrix "
+                + pattern.size()
+                + " rows");
+      }
+    }
+  }
+
+  @Override
   public final double solve(double[]... b) {
+    check(b);
     int n = pattern.size();
     double[][] rest = new double[b.length][];
-    for (int c = 0; c < b.length; c++) {
-      if (b[c].length != n) {
-        throw new IllegalArgumentException(
-            "right-hand side " + c + " has " + b[c].length + " entries, the matrix " + n + " rows");
-      }
-      rest[c] = b[c].clone();
-    }
     double[] scale = new double[b.length];
     double[] before = new double[b.length];
     double[][] x = new double[b.length][];
     for (int c = 0; c < b.length; c++) {
+      rest[c] = b[c].clone();
       scale[c] = norm(b[c]);
       x[c] = b[c].clone();
     }

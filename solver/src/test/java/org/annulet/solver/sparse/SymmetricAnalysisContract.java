@@ -160,6 +160,51 @@ abstract class SymmetricAnalysisContract {
   }
 
   @Test
+  void unrefinedSolution_isThatOfTheRefinedOneToTheConditionOfTheMatrix() {
+    TestMatrix a = TestMatrix.ring(8, 40, 0.37, 0.4);
+    double[][] re = TestMatrix.rightHandSides(3, 9, a.size());
+    double[][] im = TestMatrix.rightHandSides(4, 9, a.size());
+    double[][] oneRe = copy(re);
+    double[][] oneIm = copy(im);
+    ComplexFactor complex = analyse(a).factorComplex(a.re(), a.im());
+    complex.solveUnrefined(oneRe, oneIm);
+    double[][] real = copy(re);
+    double[][] oneReal = copy(re);
+    analyse(a).factorReal(a.re()).solve(real);
+    analyse(a).factorReal(a.re()).solveUnrefined(oneReal);
+    complex.solve(re, im);
+    for (int c = 0; c < re.length; c++) {
+      // Damping bounds the complex inverse by 1/0.4; the real one is indefinite, condition 1e4.
+      assertThat(distance(oneRe[c], re[c])).isLessThan(1e-13 * norm(re[c]));
+      assertThat(distance(oneIm[c], im[c])).isLessThan(1e-13 * norm(im[c]));
+      assertThat(distance(oneReal[c], real[c])).isLessThan(1e-11 * norm(real[c]));
+    }
+  }
+
+  @Test
+  void rightHandSideOfAnotherLength_isRefused() {
+    TestMatrix a = TestMatrix.grid(8, 8, 0.1, 0.1);
+    RealFactor real = analyse(a).factorReal(a.re());
+    ComplexFactor complex = analyse(a).factorComplex(a.re(), a.im());
+    assertThatThrownBy(() -> real.solve(new double[64], new double[63]))
+        .isInstanceOf(IllegalArgumentException.class)
+        .hasMessage("right-hand side 1 has 63 entries, the matrix 64 rows");
+    assertThatThrownBy(() -> complex.solve(new double[1][64], new double[1][63]))
+        .isInstanceOf(IllegalArgumentException.class)
+        .hasMessageContaining("63 imaginary entries");
+    assertThatThrownBy(() -> complex.solveUnrefined(new double[2][64], new double[1][64]))
+        .isInstanceOf(IllegalArgumentException.class)
+        .hasMessageContaining("2 real and 1 imaginary columns");
+  }
+
+  @Test
+  void matrixWithoutUnknowns_hasDeterminantOne() {
+    SymmetricPattern none = new PatternBuilder(0).build();
+    assertThat(analyse(none, null).factorReal(new double[0]).logDeterminant())
+        .isEqualTo(new LogDeterminant(0, 0));
+  }
+
+  @Test
   void shiftOnAnEigenvalue_stillLeavesASmallResidual() {
     TestMatrix a = TestMatrix.ring(5, 30, 0, 0);
     double[] eigenvalues =
