@@ -24,6 +24,11 @@ public sealed interface CurvePiece permits StraightPiece, ArcPiece, CubicPiece {
    */
   double deviation(double t0, double t1);
 
+  /** Parameter in [0, 1] of the point closest to the place (x, y) in m. */
+  default double closest(double x, double y) {
+    return ClosestPoint.parameter(this, x, y);
+  }
+
   /** Whether the piece is a straight line. */
   default boolean isStraight() {
     return false;

@@ -43,7 +43,7 @@ public record Edge(String name, List<Integer> points, List<CurvePiece> pieces) {
     double best = Double.POSITIVE_INFINITY;
     double[] at = new double[2];
     for (CurvePiece c : pieces) {
-      double t = ClosestPoint.parameter(c, x, y);
+      double t = c.closest(x, y);
       double d = Math.hypot(c.x(t) - x, c.y(t) - y);
       if (d < best) {
         best = d;

@@ -13,7 +13,7 @@ import org.annulet.mesher.geometry.GeometryFault.Kind;
  */
 final class ZoneLoops {
   /** One loop of one zone: its edges in order and whether each runs forward. */
-  private record Loop(int zone, boolean hole, int[] edges, boolean[] forward, double area) {}
+  private record Loop(int zone, boolean hole, int[] edges, boolean[] forward, double area, double[] box) {}
 
   private final List<Zone> zones;
   private final List<Edge> edges;
@@ -127,7 +127,8 @@ final class ZoneLoops {
       double m = Sectors.moment(edges.get(index[i]), points.get(edges.get(index[0]).first()));
       area += forward[i] ? m : -m;
     }
-    loops.add(new Loop(z, hole, index, forward, area));
+    double[] box = OutlineCheck.box(Arrays.stream(index).mapToObj(edges::get).toList());
+    loops.add(new Loop(z, hole, index, forward, area, box));
   }
 
   /** Follows the edges; −1 if the loop closes, else the place in it where it does not go on. */
@@ -307,6 +308,11 @@ final class ZoneLoops {
 
   /** Crossing number of a ray to the right with the true curves, taken as 64 chords each. */
   private boolean contains(Loop loop, double x, double y) {
+    double[] b = loop.box;
+    double slack = 0.01 * (b[2] - b[0] + b[3] - b[1]);
+    if (x < b[0] - slack || x > b[2] + slack || y < b[1] - slack || y > b[3] + slack) {
+      return false;
+    }
     boolean in = false;
     for (int e : loop.edges) {
       for (CurvePiece c : edges.get(e).pieces()) {

@@ -125,7 +125,7 @@ final class BoundaryNodes {
   }
 
   /** Radius in m of the first shell round a sharp point: a power of two. */
-  private double shell(int p) {
+  double shell(int p) {
     double r = Math.min(pointSize[p], corners.shortest[p] / 3);
     return Math.scalb(1.0, Math.getExponent(r));
   }

@@ -34,6 +34,10 @@ final class Refiner {
   private int[] pieceOf;
 
   private final boolean[] sharp;
+
+  /** How far in m from a sharp corner its thin triangles are let be. */
+  private final double[] reach;
+
   private int[] segmentStack = new int[256];
   private int segmentCount;
   private boolean[] forced = new boolean[256];
@@ -51,6 +55,10 @@ final class Refiner {
     this.segments = mesh.segments;
     this.rules = rules;
     this.sharp = nodes.sharp;
+    reach = new double[sharp.length];
+    for (int p = 0; p < reach.length; p++) {
+      reach[p] = sharp[p] ? 2.1 * nodes.shell(p) : 0;
+    }
     size = new double[Math.max(4096, 2 * mesh.nodeCount)];
     pieceOf = new int[size.length];
     Arrays.fill(pieceOf, -1);
@@ -113,7 +121,7 @@ final class Refiner {
 
   private void enqueue(int t) {
     if (t >= inQueue.length) {
-      inQueue = Arrays.copyOf(inQueue, 2 * inQueue.length);
+      inQueue = Arrays.copyOf(inQueue, Math.max(2 * inQueue.length, t + 1));
     }
     if (inQueue[t] || mesh.zone[t] < 0) {
       return;
@@ -365,7 +373,8 @@ final class Refiner {
   /** A node at the new place would lie in the circle over segment s: split that instead. */
   private void reject(int t, int s, double least, boolean big) {
     int p = segments.piece[s];
-    boolean clustered = sharp[segments.firstPoint[p]] || sharp[segments.lastPoint[p]];
+    boolean clustered =
+        near(s, segments.firstPoint[p]) || near(s, segments.lastPoint[p]);
     double half2 = 0.25 * square(segments.from[s], segments.to[s]);
     if (!big && clustered && half2 < least) {
       return;
@@ -375,6 +384,14 @@ final class Refiner {
     }
     pushSegment(s);
     enqueue(t);
+  }
+
+  private boolean near(int s, int corner) {
+    return sharp[corner] && square(segments.from[s], corner + 4) < square(reach[corner]);
+  }
+
+  private static double square(double v) {
+    return v * v;
   }
 
   /** Where the new node of a bad triangle goes; e is its shortest side. */
@@ -440,7 +457,7 @@ final class Refiner {
     }
     double ra = square(a, corner + 4);
     double rb = square(b, corner + 4);
-    return Math.abs(ra - rb) < 2e-3 * ra;
+    return Math.abs(ra - rb) < 2e-3 * ra && ra < square(reach[corner]);
   }
 
   private int commonSharp(int p, int q) {

@@ -57,10 +57,10 @@ final class SegmentRecovery {
     }
     int[] sides = new int[fresh.size()];
     int n = 0;
-    // The wanted side must not be flipped away again: it is marked by a passing segment number.
+    // The wanted side must not be flipped away again: it is marked.
     int f = mesh.twin[e];
-    mesh.seg[e] = Integer.MAX_VALUE;
-    mesh.seg[f] = Integer.MAX_VALUE;
+    mesh.seg[e] = Triangulation.PENDING;
+    mesh.seg[f] = Triangulation.PENDING;
     for (int[] side : fresh) {
       int g = mesh.find(side[0], side[1]);
       if (g >= 0) {

@@ -15,6 +15,9 @@ import java.util.Arrays;
  * nothing until {@link #commit}, so a place can be tried and dropped.
  */
 final class Triangulation {
+  /** Mark of a side that will become a segment and must not be flipped. */
+  static final int PENDING = Integer.MAX_VALUE;
+
   double[] x = new double[1024];
   double[] y = new double[1024];
 
@@ -117,7 +120,7 @@ final class Triangulation {
       twin[f] = e;
       seg[f] = s;
     }
-    if (s >= 0) {
+    if (s >= 0 && s != PENDING) {
       segments.half[s] = e;
     }
   }
