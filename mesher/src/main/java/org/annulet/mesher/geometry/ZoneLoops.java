@@ -13,7 +13,8 @@ import org.annulet.mesher.geometry.GeometryFault.Kind;
  */
 final class ZoneLoops {
   /** One loop of one zone: its edges in order and whether each runs forward. */
-  private record Loop(int zone, boolean hole, int[] edges, boolean[] forward, double area, double[] box) {}
+  private record Loop(
+      int zone, boolean hole, int[] edges, boolean[] forward, double area, double[] box) {}
 
   private final List<Zone> zones;
   private final List<Edge> edges;

@@ -373,8 +373,7 @@ final class Refiner {
   /** A node at the new place would lie in the circle over segment s: split that instead. */
   private void reject(int t, int s, double least, boolean big) {
     int p = segments.piece[s];
-    boolean clustered =
-        near(s, segments.firstPoint[p]) || near(s, segments.lastPoint[p]);
+    boolean clustered = near(s, segments.firstPoint[p]) || near(s, segments.lastPoint[p]);
     double half2 = 0.25 * square(segments.from[s], segments.to[s]);
     if (!big && clustered && half2 < least) {
       return;

@@ -34,8 +34,14 @@ class OutlineTest {
   void edgesMayRunEitherWay_andGasLiesOnTheRightHand() {
     Outline o =
         Outline.builder()
-            .point("a", 0, 0).point("b", 1, 0).point("c", 1, 1).point("d", 0, 1)
-            .line("floor", "b", "a").line("exit", "b", "c").line("roof", "d", "c").line("inlet", "d", "a")
+            .point("a", 0, 0)
+            .point("b", 1, 0)
+            .point("c", 1, 1)
+            .point("d", 0, 1)
+            .line("floor", "b", "a")
+            .line("exit", "b", "c")
+            .line("roof", "d", "c")
+            .line("inlet", "d", "a")
             .zone("gas", "exit", "roof", "inlet", "floor")
             .build();
     assertThat(o.area(0)).isCloseTo(1, within(1e-15));
@@ -48,8 +54,14 @@ class OutlineTest {
   void discOfTwoArcs_hasAreaPi() {
     Outline o =
         Outline.builder()
-            .point("e", 3, 2).point("n", 2, 3).point("w", 1, 2).point("s", 2, 1)
-            .arc("upper", "e", "n", "w").arc("lower", "w", "s", "e").zone("gas", "upper", "lower").build();
+            .point("e", 3, 2)
+            .point("n", 2, 3)
+            .point("w", 1, 2)
+            .point("s", 2, 1)
+            .arc("upper", "e", "n", "w")
+            .arc("lower", "w", "s", "e")
+            .zone("gas", "upper", "lower")
+            .build();
     assertThat(o.area(0)).isCloseTo(Math.PI, within(1e-13));
     assertThat(o.edge("upper").length()).isCloseTo(Math.PI, within(1e-12));
   }
@@ -74,8 +86,14 @@ class OutlineTest {
     List<Fault> f =
         faults(
             Outline.builder()
-                .point("a", 0, 0).point("b", 1, 1).point("c", 1, 0).point("d", 0, 1)
-                .line("up", "a", "b").line("right", "b", "c").line("down", "c", "d").line("left", "d", "a")
+                .point("a", 0, 0)
+                .point("b", 1, 1)
+                .point("c", 1, 0)
+                .point("d", 0, 1)
+                .line("up", "a", "b")
+                .line("right", "b", "c")
+                .line("down", "c", "d")
+                .line("left", "d", "a")
                 .zone("bow tie", "up", "right", "down", "left"));
     assertThat(f)
         .anySatisfy(
@@ -93,10 +111,15 @@ class OutlineTest {
       List<Fault> f =
           faults(
               square()
-                  .point("p", 0.3, 0.7).point("q", 0.5, 0.5 - (top - 0.5)).point("r", 0.7, 0.7)
-                  .line("lid", "p", "r").arc("bowl", "p", "q", "r")
+                  .point("p", 0.3, 0.7)
+                  .point("q", 0.5, 0.5 - (top - 0.5))
+                  .point("r", 0.7, 0.7)
+                  .line("lid", "p", "r")
+                  .arc("bowl", "p", "q", "r")
                   .zone("hole", "lid", "bowl")
-                  .point("m", 0, 0.5).point("n", 1, 0.5).line("middle", "m", "n")
+                  .point("m", 0, 0.5)
+                  .point("n", 1, 0.5)
+                  .line("middle", "m", "n")
                   .zone("gas", "floor", "exit", "roof", "inlet"));
       assertThat(f).anyMatch(x -> x.what().contains("'bowl' and 'middle'"));
     }
@@ -107,11 +130,21 @@ class OutlineTest {
     List<Fault> f =
         faults(
             square()
-                .point("p", 0.5, 0).point("q", 0.6, 0.3).point("r", 0.4, 0.3)
+                .point("p", 0.5, 0)
+                .point("q", 0.6, 0.3)
+                .point("r", 0.4, 0.3)
                 .line("tip", "p", "q", "r", "p")
-                .zone(new Zone("gas", List.of("floor", "exit", "roof", "inlet"), List.of(List.of("tip")))));
+                .zone(
+                    new Zone(
+                        "gas",
+                        List.of("floor", "exit", "roof", "inlet"),
+                        List.of(List.of("tip")))));
     assertThat(f)
-        .anyMatch(x -> x.kind() == Kind.TOUCHING && x.what().contains("'floor'") && x.what().contains("'tip'"));
+        .anyMatch(
+            x ->
+                x.kind() == Kind.TOUCHING
+                    && x.what().contains("'floor'")
+                    && x.what().contains("'tip'"));
   }
 
   @Test
@@ -123,13 +156,24 @@ class OutlineTest {
 
   @Test
   void twoZonesOnOneSide_andZoneInsideZone_overlap() {
-    assertThat(faults(square().zone("one", "floor", "exit", "roof", "inlet").zone("two", "floor", "exit", "roof", "inlet")))
-        .anyMatch(f -> f.kind() == Kind.OVERLAP && f.what().contains("'one'") && f.what().contains("'two'"));
+    assertThat(
+            faults(
+                square()
+                    .zone("one", "floor", "exit", "roof", "inlet")
+                    .zone("two", "floor", "exit", "roof", "inlet")))
+        .anyMatch(
+            f ->
+                f.kind() == Kind.OVERLAP
+                    && f.what().contains("'one'")
+                    && f.what().contains("'two'"));
     Outline.Builder inner =
         square()
-            .point("p", 0.4, 0.4).point("q", 0.6, 0.4).point("r", 0.5, 0.6)
+            .point("p", 0.4, 0.4)
+            .point("q", 0.6, 0.4)
+            .point("r", 0.5, 0.6)
             .line("island", "p", "q", "r", "p")
-            .zone("one", "floor", "exit", "roof", "inlet").zone("two", "island");
+            .zone("one", "floor", "exit", "roof", "inlet")
+            .zone("two", "island");
     assertThat(faults(inner)).anyMatch(f -> f.kind() == Kind.OVERLAP && f.mend().contains("holes"));
   }
 
@@ -138,9 +182,15 @@ class OutlineTest {
     assertThat(
             faults(
                 square()
-                    .point("p", 2, 0).point("q", 3, 0).point("r", 2, 1)
+                    .point("p", 2, 0)
+                    .point("q", 3, 0)
+                    .point("r", 2, 1)
                     .line("island", "p", "q", "r", "p")
-                    .zone(new Zone("gas", List.of("floor", "exit", "roof", "inlet"), List.of(List.of("island"))))))
+                    .zone(
+                        new Zone(
+                            "gas",
+                            List.of("floor", "exit", "roof", "inlet"),
+                            List.of(List.of("island"))))))
         .anyMatch(f -> f.kind() == Kind.LEAK && f.what().contains("'gas'"));
   }
 
@@ -148,15 +198,22 @@ class OutlineTest {
   void unusedEdge_zeroLength_wrongNamesAndTwinPoints_areAllReported() {
     assertThat(
             faults(
-                square().point("e", 0.5, 0.5).line("stray", "d", "e").zone("gas", "floor", "exit", "roof", "inlet")))
+                square()
+                    .point("e", 0.5, 0.5)
+                    .line("stray", "d", "e")
+                    .zone("gas", "floor", "exit", "roof", "inlet")))
         .anyMatch(f -> f.kind() == Kind.USE && f.what().contains("'stray'"));
     List<Fault> f =
         faults(
             square()
-                .line("nothing", "a", "a").line("lost", "a", "x").arc("flat", "a", "b", "a")
-                .point("e", 1, 1).point("f", Double.NaN, 0)
+                .line("nothing", "a", "a")
+                .line("lost", "a", "x")
+                .arc("flat", "a", "b", "a")
+                .point("e", 1, 1)
+                .point("f", Double.NaN, 0)
                 .line("floor", "a", "c"));
-    assertThat(f).extracting(Fault::kind)
+    assertThat(f)
+        .extracting(Fault::kind)
         .contains(Kind.ZERO_LENGTH, Kind.NAME, Kind.TOUCHING, Kind.VALUE);
     assertThat(f).hasSizeGreaterThanOrEqualTo(6);
   }

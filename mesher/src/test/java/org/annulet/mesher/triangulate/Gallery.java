@@ -29,7 +29,11 @@ final class Gallery {
     put(g, "reverse-flow chamber", 0.012, reverseFlow());
     put(g, "stepped chamber", 0.02, steppedChamber());
     put(g, "slot of 1 mm in 300 mm", 0.02, slot());
-    put(g, "tapered chamber", 0.015, polygon(0, 0.2, 0.5, 0.28, 0.6, 0.3, 0.6, 0.33, 0.5, 0.42, 0, 0.5));
+    put(
+        g,
+        "tapered chamber",
+        0.015,
+        polygon(0, 0.2, 0.5, 0.28, 0.6, 0.3, 0.6, 0.33, 0.5, 0.42, 0, 0.5));
     put(g, "wedge of 0.5°", 0.05, wedge(0.5));
     put(g, "wedge of 5°", 0.05, wedge(5));
     put(g, "wedge of 45°", 0.05, wedge(45));
@@ -54,8 +58,16 @@ final class Gallery {
     put(g, "a kilometre", 100, scaled(1e3));
     put(g, "hole on a corner", 0.05, holeOnCorner());
     put(g, "spiral", 0.02, spiral());
-    put(g, "local sizes", annularChamber(), Sizing.builder(0.03).edge("flame", 0.002).zone("burner", 0.006).growth(0.2).build());
-    put(g, "size field", polygon(0, 0, 1, 0, 1, 1, 0, 1), Sizing.builder(0.1).field((x, y) -> 0.01 + 0.2 * Math.hypot(x - 0.4, y - 0.6)).build());
+    put(
+        g,
+        "local sizes",
+        annularChamber(),
+        Sizing.builder(0.03).edge("flame", 0.002).zone("burner", 0.006).growth(0.2).build());
+    put(
+        g,
+        "size field",
+        polygon(0, 0, 1, 0, 1, 1, 0, 1),
+        Sizing.builder(0.1).field((x, y) -> 0.01 + 0.2 * Math.hypot(x - 0.4, y - 0.6)).build());
     return g;
   }
 
@@ -96,14 +108,32 @@ final class Gallery {
 
   static Outline annularChamber() {
     return Outline.builder()
-        .point("a", 0, 0.32).point("b", 0.2, 0.32).point("c", 0.2, 0.34).point("d", 0.3, 0.34)
-        .point("e", 0.3, 0.28).point("f", 0.6, 0.28).point("g", 0.6, 0.395).point("h", 0.3, 0.395)
-        .point("i", 0.3, 0.37).point("j", 0.2, 0.37).point("k", 0.2, 0.4).point("l", 0, 0.4)
-        .line("plenum hub", "a", "b").line("lower face", "b", "c").line("inner side", "c", "d")
-        .line("lower step", "d", "e").line("hub", "e", "f").line("nozzle", "f", "g")
-        .line("shroud", "g", "h").line("upper step", "h", "i").line("outer side", "i", "j")
-        .line("upper face", "j", "k").line("plenum shroud", "k", "l").line("inlet", "l", "a")
-        .line("port", "c", "j").line("flame", "d", "i")
+        .point("a", 0, 0.32)
+        .point("b", 0.2, 0.32)
+        .point("c", 0.2, 0.34)
+        .point("d", 0.3, 0.34)
+        .point("e", 0.3, 0.28)
+        .point("f", 0.6, 0.28)
+        .point("g", 0.6, 0.395)
+        .point("h", 0.3, 0.395)
+        .point("i", 0.3, 0.37)
+        .point("j", 0.2, 0.37)
+        .point("k", 0.2, 0.4)
+        .point("l", 0, 0.4)
+        .line("plenum hub", "a", "b")
+        .line("lower face", "b", "c")
+        .line("inner side", "c", "d")
+        .line("lower step", "d", "e")
+        .line("hub", "e", "f")
+        .line("nozzle", "f", "g")
+        .line("shroud", "g", "h")
+        .line("upper step", "h", "i")
+        .line("outer side", "i", "j")
+        .line("upper face", "j", "k")
+        .line("plenum shroud", "k", "l")
+        .line("inlet", "l", "a")
+        .line("port", "c", "j")
+        .line("flame", "d", "i")
         .zone("plenum", "plenum hub", "lower face", "port", "upper face", "plenum shroud", "inlet")
         .zone("burner", "inner side", "flame", "outer side", "port")
         .zone("chamber", "lower step", "hub", "nozzle", "shroud", "upper step", "flame")
@@ -113,14 +143,25 @@ final class Gallery {
   private static Outline canAnnular() {
     double s = Math.sqrt(0.5) * 0.08;
     return Outline.builder()
-        .point("o", 0, 0).point("p", 0.1, 0).point("q", 0.45, 0).point("r", 0.6, 0)
-        .point("dome", 0.08 - s + 0.02, s).point("top", 0.1, 0.08).point("bend", 0.45, 0.08)
-        .point("throat", 0.55, 0.05).point("exit", 0.6, 0.045)
+        .point("o", 0, 0)
+        .point("p", 0.1, 0)
+        .point("q", 0.45, 0)
+        .point("r", 0.6, 0)
+        .point("dome", 0.08 - s + 0.02, s)
+        .point("top", 0.1, 0.08)
+        .point("bend", 0.45, 0.08)
+        .point("throat", 0.55, 0.05)
+        .point("exit", 0.6, 0.045)
         .point("cap", 0.02, 0)
-        .line("axis of dome", "cap", "p").line("axis of can", "p", "q").line("axis of transition", "q", "r")
-        .arc("dome wall", "cap", "dome", "top").line("can wall", "top", "bend")
-        .curve("transition wall", "bend", "throat", "exit").line("exit", "r", "exit")
-        .line("can inlet", "p", "top").line("can outlet", "q", "bend")
+        .line("axis of dome", "cap", "p")
+        .line("axis of can", "p", "q")
+        .line("axis of transition", "q", "r")
+        .arc("dome wall", "cap", "dome", "top")
+        .line("can wall", "top", "bend")
+        .curve("transition wall", "bend", "throat", "exit")
+        .line("exit", "r", "exit")
+        .line("can inlet", "p", "top")
+        .line("can outlet", "q", "bend")
         .zone("dome", "axis of dome", "can inlet", "dome wall")
         .zone("can", "axis of can", "can outlet", "can wall", "can inlet")
         .zone("transition", "axis of transition", "exit", "transition wall", "can outlet")
@@ -131,15 +172,31 @@ final class Gallery {
     double c = 0.35;
     double s = Math.sqrt(0.5);
     return Outline.builder()
-        .point("a", 0, c + 0.10).point("b", 0.3, c + 0.10).point("m", 0.3 + 0.10 * s, c + 0.10 * s)
-        .point("n", 0.40, c).point("o", 0.3 + 0.10 * s, c - 0.10 * s).point("d", 0.3, c - 0.10)
-        .point("e", 0, c - 0.10).point("f", 0, c - 0.02).point("g", 0.3, c - 0.02)
-        .point("u", 0.3 + 0.02 * s, c - 0.02 * s).point("h", 0.32, c)
-        .point("v", 0.3 + 0.02 * s, c + 0.02 * s).point("i", 0.3, c + 0.02).point("j", 0, c + 0.02)
-        .line("casing", "a", "b").arc("outer end", "b", "m", "n").arc("inner end", "n", "o", "d")
-        .line("inner casing", "d", "e").line("exit", "e", "f").line("liner inside", "f", "g")
-        .arc("inner lip", "g", "u", "h").arc("outer lip", "h", "v", "i")
-        .line("liner outside", "i", "j").line("inlet", "j", "a").line("turn", "h", "n")
+        .point("a", 0, c + 0.10)
+        .point("b", 0.3, c + 0.10)
+        .point("m", 0.3 + 0.10 * s, c + 0.10 * s)
+        .point("n", 0.40, c)
+        .point("o", 0.3 + 0.10 * s, c - 0.10 * s)
+        .point("d", 0.3, c - 0.10)
+        .point("e", 0, c - 0.10)
+        .point("f", 0, c - 0.02)
+        .point("g", 0.3, c - 0.02)
+        .point("u", 0.3 + 0.02 * s, c - 0.02 * s)
+        .point("h", 0.32, c)
+        .point("v", 0.3 + 0.02 * s, c + 0.02 * s)
+        .point("i", 0.3, c + 0.02)
+        .point("j", 0, c + 0.02)
+        .line("casing", "a", "b")
+        .arc("outer end", "b", "m", "n")
+        .arc("inner end", "n", "o", "d")
+        .line("inner casing", "d", "e")
+        .line("exit", "e", "f")
+        .line("liner inside", "f", "g")
+        .arc("inner lip", "g", "u", "h")
+        .arc("outer lip", "h", "v", "i")
+        .line("liner outside", "i", "j")
+        .line("inlet", "j", "a")
+        .line("turn", "h", "n")
         .zone("supply", "casing", "outer end", "turn", "outer lip", "liner outside", "inlet")
         .zone("chamber", "inner end", "inner casing", "exit", "liner inside", "inner lip", "turn")
         .build();
@@ -152,7 +209,8 @@ final class Gallery {
   }
 
   private static Outline slot() {
-    return polygon(0, 0, 0.3, 0, 0.3, 0.1, 0.1505, 0.1, 0.1505, 0.02, 0.1495, 0.02, 0.1495, 0.1, 0, 0.1);
+    return polygon(
+        0, 0, 0.3, 0, 0.3, 0.1, 0.1505, 0.1, 0.1505, 0.02, 0.1495, 0.02, 0.1495, 0.1, 0, 0.1);
   }
 
   static Outline wedge(double degrees) {
@@ -162,11 +220,22 @@ final class Gallery {
 
   private static Outline crescent() {
     return Outline.builder()
-        .point("t", 0, 0).point("r", 0.1, 0.1).point("u", 0, 0.2).point("l", -0.1, 0.1)
-        .point("r2", 0.06, 0.06).point("u2", 0, 0.12).point("l2", -0.06, 0.06)
-        .arc("outer right", "t", "r", "u").arc("outer left", "u", "l", "t")
-        .arc("inner right", "t", "r2", "u2").arc("inner left", "u2", "l2", "t")
-        .zone(new Zone("gas", List.of("outer right", "outer left"), List.of(List.of("inner right", "inner left"))))
+        .point("t", 0, 0)
+        .point("r", 0.1, 0.1)
+        .point("u", 0, 0.2)
+        .point("l", -0.1, 0.1)
+        .point("r2", 0.06, 0.06)
+        .point("u2", 0, 0.12)
+        .point("l2", -0.06, 0.06)
+        .arc("outer right", "t", "r", "u")
+        .arc("outer left", "u", "l", "t")
+        .arc("inner right", "t", "r2", "u2")
+        .arc("inner left", "u2", "l2", "t")
+        .zone(
+            new Zone(
+                "gas",
+                List.of("outer right", "outer left"),
+                List.of(List.of("inner right", "inner left"))))
         .build();
   }
 
@@ -174,11 +243,15 @@ final class Gallery {
   private static Outline outerTangents() {
     double h = Math.sqrt(3);
     return Outline.builder()
-        .point("ab", 0, 0).point("bc", 0.5, 0.5 * h).point("ca", -0.5, 0.5 * h)
+        .point("ab", 0, 0)
+        .point("bc", 0.5, 0.5 * h)
+        .point("ca", -0.5, 0.5 * h)
         .point("ma", -1 + Math.cos(Math.PI / 6), 0.5)
         .point("mb", 1 - Math.cos(Math.PI / 6), 0.5)
         .point("mc", 0, h - 1)
-        .arc("a", "ab", "ma", "ca").arc("b", "ab", "mb", "bc").arc("c", "bc", "mc", "ca")
+        .arc("a", "ab", "ma", "ca")
+        .arc("b", "ab", "mb", "bc")
+        .arc("c", "bc", "mc", "ca")
         .zone("gas", "a", "c", "b")
         .build();
   }
@@ -208,10 +281,20 @@ final class Gallery {
 
   private static Outline smoothWalls() {
     return Outline.builder()
-        .point("a", 0, 0.1).point("b", 0.2, 0.08).point("c", 0.4, 0.12).point("d", 0.7, 0.02)
-        .point("e", 0.7, 0.2).point("f", 0.5, 0.3).point("g", 0.2, 0.25).point("h", 0, 0.2)
-        .curve("hub", "a", "b", "c", "d").line("exit", "d", "e").curve("shroud", "e", "f", "g", "h")
-        .line("inlet", "h", "a").zone("gas", "hub", "exit", "shroud", "inlet").build();
+        .point("a", 0, 0.1)
+        .point("b", 0.2, 0.08)
+        .point("c", 0.4, 0.12)
+        .point("d", 0.7, 0.02)
+        .point("e", 0.7, 0.2)
+        .point("f", 0.5, 0.3)
+        .point("g", 0.2, 0.25)
+        .point("h", 0, 0.2)
+        .curve("hub", "a", "b", "c", "d")
+        .line("exit", "d", "e")
+        .curve("shroud", "e", "f", "g", "h")
+        .line("inlet", "h", "a")
+        .zone("gas", "hub", "exit", "shroud", "inlet")
+        .build();
   }
 
   private static Outline disc() {
@@ -224,7 +307,11 @@ final class Gallery {
     Outline.Builder b = Outline.builder();
     circle(b, "outer ", 0, 0, 0.4);
     circle(b, "inner ", 0, 0, 0.3);
-    return b.zone(new Zone("gas", List.of("outer upper", "outer lower"), List.of(List.of("inner upper", "inner lower"))))
+    return b.zone(
+            new Zone(
+                "gas",
+                List.of("outer upper", "outer lower"),
+                List.of(List.of("inner upper", "inner lower"))))
         .build();
   }
 
@@ -272,32 +359,69 @@ final class Gallery {
 
   private static Outline resonator() {
     return Outline.builder()
-        .point("a", 0, 0).point("b", 0.4, 0).point("c", 0.4, 0.1).point("d", 0.204, 0.1)
-        .point("e", 0.204, 0.13).point("f", 0.23, 0.13).point("g", 0.23, 0.18).point("h", 0.17, 0.18)
-        .point("i", 0.17, 0.13).point("j", 0.2, 0.13).point("k", 0.2, 0.1).point("l", 0, 0.1)
-        .line("chamber wall", "d", "c", "b", "a", "l", "k").line("neck right", "d", "e")
-        .line("neck left", "k", "j").line("cavity wall", "e", "f", "g", "h", "i", "j")
-        .line("mouth", "k", "d").line("throat", "j", "e")
-        .zone("chamber", "chamber wall", "mouth").zone("neck", "mouth", "neck right", "throat", "neck left")
-        .zone("cavity", "cavity wall", "throat").build();
+        .point("a", 0, 0)
+        .point("b", 0.4, 0)
+        .point("c", 0.4, 0.1)
+        .point("d", 0.204, 0.1)
+        .point("e", 0.204, 0.13)
+        .point("f", 0.23, 0.13)
+        .point("g", 0.23, 0.18)
+        .point("h", 0.17, 0.18)
+        .point("i", 0.17, 0.13)
+        .point("j", 0.2, 0.13)
+        .point("k", 0.2, 0.1)
+        .point("l", 0, 0.1)
+        .line("chamber wall", "d", "c", "b", "a", "l", "k")
+        .line("neck right", "d", "e")
+        .line("neck left", "k", "j")
+        .line("cavity wall", "e", "f", "g", "h", "i", "j")
+        .line("mouth", "k", "d")
+        .line("throat", "j", "e")
+        .zone("chamber", "chamber wall", "mouth")
+        .zone("neck", "mouth", "neck right", "throat", "neck left")
+        .zone("cavity", "cavity wall", "throat")
+        .build();
   }
 
   private static Outline doubleWall() {
     return Outline.builder()
-        .point("a", 0, 0).point("b", 0.3, 0).point("c", 0.3, 0.1).point("d", 0, 0.1)
-        .point("e", 0.3, 0.102).point("f", 0, 0.102)
-        .line("hub", "a", "b").line("exit", "b", "c").line("liner", "c", "d").line("inlet", "d", "a")
-        .line("gap exit", "c", "e").line("casing", "e", "f").line("gap inlet", "f", "d")
-        .zone("chamber", "hub", "exit", "liner", "inlet").zone("gap", "gap exit", "casing", "gap inlet", "liner")
+        .point("a", 0, 0)
+        .point("b", 0.3, 0)
+        .point("c", 0.3, 0.1)
+        .point("d", 0, 0.1)
+        .point("e", 0.3, 0.102)
+        .point("f", 0, 0.102)
+        .line("hub", "a", "b")
+        .line("exit", "b", "c")
+        .line("liner", "c", "d")
+        .line("inlet", "d", "a")
+        .line("gap exit", "c", "e")
+        .line("casing", "e", "f")
+        .line("gap inlet", "f", "d")
+        .zone("chamber", "hub", "exit", "liner", "inlet")
+        .zone("gap", "gap exit", "casing", "gap inlet", "liner")
         .build();
   }
 
   private static Outline fourZones() {
     return Outline.builder()
-        .point("o", 0, 0).point("e", 1, 0).point("n", 0, 1).point("w", -1, 0).point("s", 0, -1)
-        .line("oe", "o", "e").line("on", "o", "n").line("ow", "o", "w").line("os", "o", "s")
-        .line("en", "e", "n").line("nw", "n", "w").line("ws", "w", "s").line("se", "s", "e")
-        .zone("1", "oe", "en", "on").zone("2", "on", "nw", "ow").zone("3", "ow", "ws", "os").zone("4", "os", "se", "oe")
+        .point("o", 0, 0)
+        .point("e", 1, 0)
+        .point("n", 0, 1)
+        .point("w", -1, 0)
+        .point("s", 0, -1)
+        .line("oe", "o", "e")
+        .line("on", "o", "n")
+        .line("ow", "o", "w")
+        .line("os", "o", "s")
+        .line("en", "e", "n")
+        .line("nw", "n", "w")
+        .line("ws", "w", "s")
+        .line("se", "s", "e")
+        .zone("1", "oe", "en", "on")
+        .zone("2", "on", "nw", "ow")
+        .zone("3", "ow", "ws", "os")
+        .zone("4", "os", "se", "oe")
         .build();
   }
 
@@ -311,14 +435,26 @@ final class Gallery {
   private static Outline smoothHole() {
     Outline.Builder b = Outline.builder();
     closed(b, "wall", 0, 0, 1, 0, 1, 0.5, 0, 0.5);
-    b.point("p", 0.3, 0.2).point("q", 0.6, 0.15).point("r", 0.7, 0.3).point("s", 0.4, 0.35).curve("island", "p", "q", "r", "s", "p");
+    b.point("p", 0.3, 0.2)
+        .point("q", 0.6, 0.15)
+        .point("r", 0.7, 0.3)
+        .point("s", 0.4, 0.35)
+        .curve("island", "p", "q", "r", "s", "p");
     return b.zone(new Zone("gas", List.of("wall"), List.of(List.of("island")))).build();
   }
 
   private static Outline farAway() {
     double c = Math.cos(0.3);
     double s = Math.sin(0.3);
-    return polygon(1000, 1000, 1000 + c, 1000 + s, 1000 + c - 0.3 * s, 1000 + s + 0.3 * c, 1000 - 0.3 * s, 1000 + 0.3 * c);
+    return polygon(
+        1000,
+        1000,
+        1000 + c,
+        1000 + s,
+        1000 + c - 0.3 * s,
+        1000 + s + 0.3 * c,
+        1000 - 0.3 * s,
+        1000 + 0.3 * c);
   }
 
   private static Outline scaled(double m) {

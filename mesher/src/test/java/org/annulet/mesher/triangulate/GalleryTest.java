@@ -19,7 +19,8 @@ import org.junit.jupiter.params.provider.MethodSource;
 /** Every law on every outline of the gallery. */
 class GalleryTest {
   /** Outlines whose boundary meets itself in a point: no simple loop there, and rightly so. */
-  private static final Set<String> PINCHED = Set.of("crescent of tangent circles", "hole on a corner");
+  private static final Set<String> PINCHED =
+      Set.of("crescent of tangent circles", "hole on a corner");
 
   static List<String> names() {
     return new ArrayList<>(Gallery.all().keySet());
@@ -32,8 +33,7 @@ class GalleryTest {
     Mesh m = OutlineMesher.mesh(piece.outline(), piece.sizing());
     assertThat(
             MeshCheck.of(m).stream()
-                .filter(
-                    f -> !(PINCHED.contains(name) && f.law() == MeshCheck.Law.CLOSED_LOOPS))
+                .filter(f -> !(PINCHED.contains(name) && f.law() == MeshCheck.Law.CLOSED_LOOPS))
                 .toList())
         .isEmpty();
     assertThat(MeshCheck.delaunay(m)).isEmpty();
@@ -145,7 +145,8 @@ class GalleryTest {
         for (int k = 0; k < i; k++) {
           double[] u = ways.get(p).get(i);
           double[] v = ways.get(p).get(k);
-          double cos = (u[0] * v[0] + u[1] * v[1]) / Math.hypot(u[0], u[1]) / Math.hypot(v[0], v[1]);
+          double cos =
+              (u[0] * v[0] + u[1] * v[1]) / Math.hypot(u[0], u[1]) / Math.hypot(v[0], v[1]);
           if (cos > 0.499) {
             sharp.add(o.points().get(p));
           }
