@@ -116,6 +116,11 @@ public final class CaseReader {
     String about = m.get("about").flatMap(Entry::text).orElse("");
     Optional<Geometry> geometry = m.get("geometry").flatMap(GeometryReader::read);
     Geometry shape = geometry.orElse(null);
+    if (binder.clean()) { // a geometry with faults of its own is not drawn
+      geometry
+          .flatMap(DrawnShape::check)
+          .ifPresent(f -> DrawnShape.problems(binder.source(), f).forEach(binder::add));
+    }
     // Without a geometry no name can be checked; values still can.
     EdgeNames names = geometry.map(EdgeNames::of).orElse(new EdgeNames(List.of(), Map.of()));
     List<String> zones = geometry.map(Geometry::zoneNames).orElse(List.of());

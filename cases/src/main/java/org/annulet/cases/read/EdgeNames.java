@@ -26,6 +26,16 @@ record EdgeNames(List<String> walls, Map<String, List<String>> inner) {
     return all;
   }
 
+  /** Whether the names are known at all. */
+  boolean known() {
+    return !walls.isEmpty() || !inner.isEmpty();
+  }
+
+  /** Stands for a ring zone whose shape could not be read: edge names are then not known. */
+  static Geometry.RingZone shapeless(String name) {
+    return new Geometry.Annulus(name, Double.NaN, Double.NaN, Double.NaN);
+  }
+
   /** Names of a geometry; none for a mesh file, which is not yet read. */
   static EdgeNames of(Geometry geometry) {
     if (geometry instanceof Geometry.Ring ring) {
@@ -47,15 +57,18 @@ record EdgeNames(List<String> walls, Map<String, List<String>> inner) {
     List<String> walls = new ArrayList<>();
     Map<String, List<String>> inner = new LinkedHashMap<>();
     List<Geometry.RingZone> zones = ring.zones();
+    if (zones.stream().anyMatch(z -> z.equals(shapeless(z.name())))) {
+      return new EdgeNames(List.of(), Map.of());
+    }
     for (int i = 0; i < zones.size(); i++) {
       Geometry.RingZone zone = zones.get(i);
       Geometry.RingZone before = i > 0 ? zones.get(i - 1) : null;
       Geometry.RingZone after = i + 1 < zones.size() ? zones.get(i + 1) : null;
       boolean ducts = zone instanceof Geometry.Ducts;
-      if (before == null || !ducts && before instanceof Geometry.Ducts) {
+      if (before == null || share(zone) > share(before)) {
         walls.add(zone.name() + ".upstream");
       }
-      if (after == null || !ducts && after instanceof Geometry.Ducts) {
+      if (after == null || share(zone) > share(after)) {
         walls.add(zone.name() + ".downstream");
       }
       if (ducts) {
@@ -72,6 +85,13 @@ record EdgeNames(List<String> walls, Map<String, List<String>> inner) {
       }
     }
     return new EdgeNames(walls, inner);
+  }
+
+  /**
+   * Angle of the ring that one burner's part of a zone covers, in rad; all of it for an annulus.
+   */
+  private static double share(Geometry.RingZone zone) {
+    return zone instanceof Geometry.Ducts d ? d.bore() / d.meanRadius() : Double.POSITIVE_INFINITY;
   }
 
   private static EdgeNames ofOutline(Outline outline) {

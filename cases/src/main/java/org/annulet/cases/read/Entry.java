@@ -150,8 +150,8 @@ final class Entry {
     String unit = stated;
     if (unit.isEmpty()
         && items.size() > 1
-        && items.get(0).looksLikeNumber("[0-9.eE+-]+")
-        && !items.get(items.size() - 1).looksLikeNumber("[+-]?[0-9.].*")) {
+        && items.get(0).isBareNumber()
+        && !items.get(items.size() - 1).looksLikeNumber("[+-]?[0-9.](?!/).*")) {
       unit = items.get(items.size() - 1).text().orElse("");
       items = items.subList(0, items.size() - 1);
     }
@@ -181,6 +181,11 @@ final class Entry {
       return Collections.nCopies(count, Double.NaN);
     }
     return all;
+  }
+
+  /** Whether it is a number without a unit. */
+  boolean isBareNumber() {
+    return looksLikeNumber("[0-9.eE+-]+");
   }
 
   private boolean looksLikeNumber(String pattern) {

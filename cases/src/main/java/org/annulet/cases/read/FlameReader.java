@@ -96,7 +96,7 @@ final class FlameReader {
   }
 
   private Optional<String> innerEdge(Entry entry) {
-    if (geometry instanceof Geometry.MeshFile) {
+    if (!names.known()) {
       return entry.text();
     }
     Optional<String> name = entry.text();
@@ -154,12 +154,12 @@ final class FlameReader {
     Optional<Entry> stated = m.get("flow_from");
     List<String> sides = names.inner().getOrDefault(edge, List.of());
     if (stated.isPresent()) {
-      return geometry instanceof Geometry.MeshFile
+      return sides.isEmpty()
           ? stated.get().text()
           : stated.get().nameOf("zone at edge '" + edge + "' called", sides);
     }
     if (geometry instanceof Geometry.Ring) {
-      return Optional.of(sides.get(0));
+      return Optional.of(sides.isEmpty() ? "" : sides.get(0));
     }
     Optional<Outline> outline = outline();
     List<String> ducts =
@@ -222,18 +222,18 @@ final class FlameReader {
           || Double.isFinite(x[1]) && x[1] > end + slack) {
         m.entry()
             .fault(
-                String.format(
-                    Locale.ROOT,
-                    "the stretch x = %.4g mm to %.4g mm leaves zone '%s'",
-                    1000 * x[0],
-                    1000 * x[1],
-                    zone.get()),
-                String.format(
-                    Locale.ROOT,
-                    "the zone spans x = %.4g mm to %.4g mm; 'distance: [a, b]' counts from its"
-                        + " upstream end",
-                    1000 * start,
-                    1000 * end));
+                "the stretch x = "
+                    + Shown.millimetres(x[0])
+                    + " to "
+                    + Shown.millimetres(x[1])
+                    + " leaves zone '"
+                    + zone.get()
+                    + "'",
+                "the zone spans x = "
+                    + Shown.millimetres(start)
+                    + " to "
+                    + Shown.millimetres(end)
+                    + "; 'distance: [a, b]' counts from its upstream end");
       }
       Geometry.RingZone z = r.zone(zone.get());
       double most =
@@ -243,7 +243,7 @@ final class FlameReader {
             .orElseThrow()
             .fault(
                 "wider than a burner's share of zone '" + zone.get() + "'",
-                String.format(Locale.ROOT, "at most %.4g mm", 1000 * most));
+                "at most " + Shown.millimetres(most));
       }
     }
     return zone.map(z -> new Stretch(z, x[0], x[1], width));
@@ -338,7 +338,7 @@ final class FlameReader {
       return burners;
     }
     for (Entry item : entry.items()) {
-      int b = item.whole(1, Math.max(1, count));
+      int b = item.whole(1, count >= 1 ? count : GeometryReader.MOST_BURNERS);
       if (b >= 1 && burners.contains(b)) {
         item.fault("burner " + b + " stands here twice", "leave one out");
       }

@@ -3,7 +3,6 @@ package org.annulet.cases.read;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
@@ -101,8 +100,7 @@ final class GasReader {
     if (Range.GAMMA.excludes(gamma)) {
       z.entry()
           .fault(
-              String.format(
-                  Locale.ROOT, "gamma = density × sound_speed² / mean_pressure = %.4g", gamma),
+              "gamma = density × sound_speed² / mean_pressure = " + Shown.number(gamma),
               "gamma must be " + Range.GAMMA.words() + ": check all three, pressure is absolute");
     }
     return Optional.of(new Gas.Given(c, rho));
@@ -205,7 +203,7 @@ final class GasReader {
       parts
           .entry()
           .fault(
-              String.format(Locale.ROOT, "the parts of the fuel add up to %.6g %%", 100 * sum),
+              "the parts of the fuel add up to " + Shown.number(100 * sum) + " %",
               "parts by volume add up to 100 %");
     }
   }

@@ -102,7 +102,7 @@ final class GeometryReader {
               at.entries()
                   .forEach(
                       (name, size) -> {
-                        if (!names.contains(name)) {
+                        if (!names.isEmpty() && !names.contains(name)) {
                           at.at(name)
                               .fault("no edge or zone '" + name + "'", Nearest.advice(name, names));
                         }
@@ -135,8 +135,10 @@ final class GeometryReader {
         new Geometry.Ring(
             count, radius, List.copyOf(zones), new Geometry.MeshSize(Double.NaN, Map.of()));
     List<String> names = new ArrayList<>(bare.zoneNames());
-    names.addAll(EdgeNames.of(bare).all());
-    return new Geometry.Ring(count, radius, bare.zones(), sizes(m, names));
+    EdgeNames edges = EdgeNames.of(bare);
+    names.addAll(edges.all());
+    return new Geometry.Ring(
+        count, radius, bare.zones(), sizes(m, edges.known() ? names : List.of()));
   }
 
   private static Optional<Geometry.RingZone> ringZone(Entry item, int count) {
@@ -150,7 +152,7 @@ final class GeometryReader {
       if (!any.has("shape")) {
         item.fault("the key 'shape' is missing", "add 'shape: annulus' or 'shape: ducts'");
       }
-      return Optional.empty();
+      return any.get("name").flatMap(Entry::text).map(EdgeNames::shapeless);
     }
     boolean annulus = shape.get().equals("annulus");
     Mapping z = Mapping.of(item, annulus ? CaseKeys.ANNULUS : CaseKeys.DUCTS);
@@ -174,10 +176,8 @@ final class GeometryReader {
     if (count >= 1 && count * bore >= 2 * Math.PI * radius) {
       item.fault(
           count + " ducts do not fit side by side on the mean radius",
-          String.format(
-              Locale.ROOT,
-              "the bore must be below 2π × mean radius / burner_count = %.4g mm",
-              2000 * Math.PI * radius / count));
+          "the bore must be below 2π × mean radius / burner_count = "
+              + Shown.millimetres(2 * Math.PI * radius / count));
     }
     return name.map(n -> new Geometry.Ducts(n, radius, bore, length));
   }

@@ -59,6 +59,10 @@ final class Mapping {
           at.fault("merge keys (<<) are not part of YAML 1.2", "write the values out");
         } else if (CaseKeys.RESERVED.contains(name)) {
           at.fault("'" + name + "' is not supported in this version", "leave it out");
+        } else if (name.matches("[0-9].*")) {
+          at.fault(
+              "unknown key '" + name + "' after a comma",
+              "decimals are written with a point: a comma begins the next entry");
         } else {
           at.fault("unknown key '" + name + "'", Nearest.advice(name, allowed));
         }
@@ -146,7 +150,7 @@ final class Mapping {
           present.isEmpty()
               ? "one of these keys is wanted: " + String.join(", ", keys)
               : "these keys exclude each other: " + String.join(", ", present),
-          "keep one of them");
+          present.isEmpty() ? "add one of them" : "keep one of them");
     }
     return Optional.empty();
   }

@@ -27,6 +27,7 @@ final class OutlineReader {
     geometry.get("edges").ifPresent(e -> r.edges(e));
     geometry.get("zones").ifPresent(e -> r.zones(e));
     geometry.get("edges").ifPresent(e -> r.uses(Mapping.named(e)));
+    geometry.get("points").ifPresent(e -> r.spare(Mapping.named(e)));
     return new Outline(r.points, r.edges, r.zones);
   }
 
@@ -47,6 +48,10 @@ final class OutlineReader {
         unit = Optional.of("m");
       }
     }
+    if (unit.isEmpty() && bare(entry)) {
+      entry.fault("the points carry no unit", "add 'points_in: mm' above them");
+      unit = Optional.of("m");
+    }
     Optional<String> stated = unit;
     Mapping.named(entry)
         .checkNames()
@@ -56,6 +61,14 @@ final class OutlineReader {
               List<Double> xy = e.numbers(QuantityKind.LENGTH, Range.ANY, 2, stated.orElse(""));
               points.put(name, new Outline.Point(xy.get(0), xy.get(1)));
             });
+  }
+
+  /** Whether every coordinate of every point is a number without a unit. */
+  private static boolean bare(Entry entry) {
+    Mapping points = Mapping.named(entry);
+    return !points.entries().isEmpty()
+        && points.values().stream()
+            .allMatch(p -> p.isList() && p.items().stream().allMatch(Entry::isBareNumber));
   }
 
   private void edges(Entry entry) {
@@ -145,7 +158,7 @@ final class OutlineReader {
     Outline.Edge first = edges.get(names.get(0));
     if (names.size() == 1) {
       if (!first.closed()) {
-        gap(list, first.name(), end(first), first.name(), start(first));
+        gap(list, first, first);
       }
       return;
     }
@@ -160,25 +173,30 @@ final class OutlineReader {
       } else if (end(e).equals(at)) {
         at = start(e);
       } else {
-        gap(list, names.get(i - 1), at, e.name(), start(e) + " or " + end(e));
+        gap(list, edges.get(names.get(i - 1)), e);
         return;
       }
     }
     if (!at.equals(begin)) {
-      gap(list, names.get(names.size() - 1), at, names.get(0), begin);
+      gap(list, edges.get(names.get(names.size() - 1)), first);
     }
   }
 
-  private static void gap(Entry list, String before, String at, String after, String begin) {
+  private static void gap(Entry list, Outline.Edge before, Outline.Edge after) {
     list.fault(
         "the loop is open: edge '"
-            + before
-            + "' ends at point "
-            + at
-            + ", edge '"
-            + after
-            + "' begins at "
-            + begin,
+            + before.name()
+            + "' ("
+            + start(before)
+            + "–"
+            + end(before)
+            + ") does not lead on to edge '"
+            + after.name()
+            + "' ("
+            + start(after)
+            + "–"
+            + end(after)
+            + ")",
         "name the edges in order round the zone; each may run either way");
   }
 
@@ -188,6 +206,16 @@ final class OutlineReader {
 
   private static String end(Outline.Edge e) {
     return e.points().get(e.points().size() - 1);
+  }
+
+  private void spare(Mapping pointKeys) {
+    for (String point : points.keySet()) {
+      if (edges.values().stream().noneMatch(e -> e.points().contains(point))) {
+        pointKeys
+            .at(point)
+            .caution("point '" + point + "' is on no edge", "use it or leave it out");
+      }
+    }
   }
 
   private void uses(Mapping edgeKeys) {

@@ -2,7 +2,6 @@ package org.annulet.cases.read;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 import java.util.TreeSet;
 import org.annulet.cases.units.QuantityKind;
 import org.annulet.solver.modes.Window;
@@ -67,8 +66,14 @@ record WindowReader(double[] frequency, double[] growth, List<Integer> orders) {
   }
 
   private static String empty(String what, double[] ends, String unit) {
-    return String.format(
-        Locale.ROOT, "the window is empty: %s from %.6g to %.6g %s", what, ends[0], ends[1], unit);
+    return "the window is empty: "
+        + what
+        + " from "
+        + Shown.number(ends[0])
+        + " to "
+        + Shown.number(ends[1])
+        + " "
+        + unit;
   }
 
   private static List<Integer> orders(Mapping m, Geometry geometry) {
