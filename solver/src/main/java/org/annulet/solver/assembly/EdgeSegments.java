@@ -49,6 +49,40 @@ record EdgeSegments(String edge, List<Segment> segments) {
     return collect(nodes, metric, edge, e -> nodes.mesh().segmentLeft(e));
   }
 
+  /**
+   * The edge as the gas passes through it: where the weight of the geometry jumps, as at the end of
+   * a duct, the side with the smaller one.
+   */
+  static EdgeSegments passage(CutMesh nodes, Metric metric, String edge) {
+    Mesh mesh = nodes.mesh();
+    return collect(
+        nodes,
+        metric,
+        edge,
+        e -> {
+          int left = mesh.segmentLeft(e);
+          int right = mesh.segmentRight(e);
+          if (right < 0) {
+            return left;
+          }
+          return middle(mesh, metric, left, e) <= middle(mesh, metric, right, e) ? left : right;
+        });
+  }
+
+  private static double middle(Mesh mesh, Metric metric, int t, int e) {
+    double y = cornerY(mesh, t, mesh.segmentStart(e)) + cornerY(mesh, t, mesh.segmentEnd(e));
+    return metric.length(t, y / 2);
+  }
+
+  /** The same inner edge from its other side. */
+  EdgeSegments opposite(CutMesh nodes, Metric metric) {
+    java.util.Map<Integer, Integer> other = new java.util.HashMap<>();
+    for (Segment s : segments) {
+      other.put(s.number(), s.opposite());
+    }
+    return collect(nodes, metric, edge, other::get);
+  }
+
   /** The named side of an inner edge. */
   static EdgeSegments of(CutMesh nodes, Metric metric, String edge, Side side) {
     Mesh mesh = nodes.mesh();

@@ -94,7 +94,7 @@ final class FlameTerms {
   }
 
   private EdgeSegments ofBurner(String edge, int burner) {
-    EdgeSegments all = EdgeSegments.ofBoundary(assembler.nodes(), assembler.metric(), edge);
+    EdgeSegments all = EdgeSegments.passage(assembler.nodes(), assembler.metric(), edge);
     return ofBurner(all, burner);
   }
 
