@@ -1,0 +1,155 @@
+package org.annulet.cases.study;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.annulet.cases.read.CaseFaultException;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.Geometry;
+import org.annulet.cases.read.Problem;
+import org.annulet.mesher.geometry.GeometryFault;
+import org.annulet.mesher.geometry.Outline;
+import org.annulet.mesher.geometry.RingShape;
+import org.annulet.mesher.geometry.RingShape.RingZone;
+import org.annulet.mesher.geometry.Zone;
+import org.annulet.mesher.mesh.Mesh;
+import org.annulet.mesher.mesh.RingCells;
+import org.annulet.mesher.triangulate.MeshingLimitException;
+import org.annulet.mesher.triangulate.OutlineMesher;
+import org.annulet.mesher.triangulate.RingMesher;
+import org.annulet.mesher.triangulate.Sizing;
+import org.annulet.solver.assembly.CrossSection;
+import org.annulet.solver.assembly.Plane;
+import org.annulet.solver.assembly.Ring;
+import org.annulet.solver.assembly.Section;
+
+/**
+ * The shape of a case as mesh and as the solver's geometry.
+ *
+ * @param mesh of the whole chamber
+ * @param cells half cell and its images, on a ring only
+ * @param geometry what the mesh's coordinates mean; a section at order 0
+ */
+public record ChamberShape(
+    Mesh mesh, Optional<RingCells> cells, org.annulet.solver.assembly.Geometry geometry) {
+
+  /**
+   * Meshes the geometry of a case.
+   *
+   * @param scale factor on all sizes of triangles: 1 for the mesh the case asks for
+   * @throws CaseFaultException if the outline cannot be meshed; every fault with its place
+   */
+  public static ChamberShape of(CaseFile caseFile, double scale) {
+    try {
+      return mesh(caseFile, scale);
+    } catch (GeometryFault e) {
+      List<Problem> problems = new ArrayList<>();
+      for (GeometryFault.Fault f : e.faults()) {
+        String[] text = f.toString().split("\\R\\s*mend: ", 2);
+        problems.add(caseFile.source().problem("geometry", text[0], text.length > 1 ? text[1] : ""));
+      }
+      throw new CaseFaultException(problems);
+    } catch (MeshingLimitException e) {
+      throw new CaseFaultException(
+          List.of(
+              caseFile
+                  .source()
+                  .problem("geometry.mesh_size", e.getMessage(), "choose larger triangles")));
+    }
+  }
+
+  private static ChamberShape mesh(CaseFile caseFile, double scale) {
+    Geometry g = caseFile.geometry();
+    Sizing sizing = sizing(g.meshSize(), g.zoneNames()).scaled(scale);
+    if (g instanceof Geometry.Ring ring) {
+      RingCells cells = RingMesher.mesh(ringShape(ring), sizing);
+      return new ChamberShape(cells.whole(), Optional.of(cells), ringGeometry(ring));
+    }
+    if (g instanceof Geometry.Section section) {
+      Map<String, Section.Ducts> ducts = new LinkedHashMap<>();
+      section
+          .outline()
+          .zones()
+          .forEach(
+              (name, z) ->
+                  z.separateDucts()
+                      .ifPresent(
+                          d -> ducts.put(name, new Section.Ducts(d.count(), d.openShare()))));
+      return flat(section.outline(), sizing, new Section(0, ducts));
+    }
+    if (g instanceof Geometry.CrossSection cross) {
+      return flat(cross.outline(), sizing, new CrossSection(cross.axialWavenumber()));
+    }
+    if (g instanceof Geometry.Plane plane) {
+      return flat(plane.outline(), sizing, new Plane(plane.depth()));
+    }
+    throw new CaseFaultException(
+        List.of(
+            caseFile
+                .source()
+                .problem(
+                    "geometry.kind",
+                    "a mesh made elsewhere cannot be solved in this version",
+                    "draw the outline in the case file")));
+  }
+
+  private static ChamberShape flat(
+      org.annulet.cases.read.Outline read,
+      Sizing sizing,
+      org.annulet.solver.assembly.Geometry geometry) {
+    Outline.Builder b = Outline.builder();
+    read.points().forEach((name, p) -> b.point(name, p.x(), p.y()));
+    read.edges()
+        .forEach(
+            (name, e) -> {
+              String[] through = e.points().toArray(new String[0]);
+              switch (e.shape()) {
+                case LINE -> b.line(name, through);
+                case ARC -> b.arc(name, through[0], through[1], through[2]);
+                case CURVE -> b.curve(name, through);
+              }
+            });
+    read.zones().forEach((name, z) -> b.zone(new Zone(name, z.boundary(), z.holes())));
+    return new ChamberShape(OutlineMesher.mesh(b.build(), sizing), Optional.empty(), geometry);
+  }
+
+  private static Sizing sizing(Geometry.MeshSize size, List<String> zones) {
+    Sizing.Builder b = Sizing.builder(size.largest());
+    size.local()
+        .forEach(
+            (name, h) -> {
+              if (zones.contains(name)) {
+                b.zone(name, h);
+              } else {
+                b.edge(name, h);
+              }
+            });
+    return b.build();
+  }
+
+  private static RingShape ringShape(Geometry.Ring ring) {
+    List<RingZone> zones = new ArrayList<>();
+    for (Geometry.RingZone z : ring.zones()) {
+      if (z instanceof Geometry.Annulus a) {
+        zones.add(RingZone.annulus(a.name(), a.meanRadius(), a.gap(), a.length()));
+      } else if (z instanceof Geometry.Ducts d) {
+        zones.add(RingZone.ducts(d.name(), d.meanRadius(), d.width(), d.length()));
+      }
+    }
+    return new RingShape(ring.burnerCount(), ring.unrolledRadius(), zones);
+  }
+
+  private static Ring ringGeometry(Geometry.Ring ring) {
+    Map<String, Ring.Annulus> zones = new LinkedHashMap<>();
+    for (Geometry.RingZone z : ring.zones()) {
+      double height =
+          z instanceof Geometry.Annulus a
+              ? a.gap()
+              : ((Geometry.Ducts) z).area() / ((Geometry.Ducts) z).width();
+      zones.put(z.name(), new Ring.Annulus(z.meanRadius(), height));
+    }
+    return new Ring(ring.burnerCount(), ring.unrolledRadius(), zones);
+  }
+}
