@@ -1,0 +1,99 @@
+package org.annulet.cases.study;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import org.annulet.cases.read.CaseFaultException;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.mesher.mesh.Mesh;
+import org.annulet.mesher.mesh.RingCells;
+import org.annulet.solver.assembly.AssembledProblem;
+import org.annulet.solver.assembly.BlochAssembly;
+import org.annulet.solver.assembly.ProblemBuilder;
+import org.annulet.solver.assembly.Section;
+import org.annulet.solver.assembly.SectionAssembly;
+import org.annulet.solver.medium.Medium;
+
+/**
+ * A case as the operators to be solved: one for each azimuthal order of a section, one for each Bloch number of a ring whose burners
+ * are all alike, one for a whole ring with staged burners, one for a plane.
+ *
+ * @param shape mesh and geometry
+ * @param medium gas on the triangles of the whole mesh
+ * @param parts the operators
+ * @param method which way was taken and why, in one sentence
+ */
+public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, String method) {
+  /**
+   * One operator.
+   *
+   * @param name for the reader ("order 1")
+   * @param order azimuthal order; null where the operator has none of its own
+   * @param copies modes of the chamber behind each eigenvalue: 2 where the operator stands for a turning wave and its mirror image
+   * @param assembled operator and expansion
+   */
+  public record Part(String name, Integer order, int copies, AssembledProblem assembled) {}
+
+  /** Smallest number of triangle sides in the shortest wavelength that is taken without a warning. */
+  static final double POINTS_PER_WAVELENGTH = 10;
+
+  /**
+   * The operators of a case.
+   *
+   * @param scale factor on all sizes of triangles
+   * @throws CaseFaultException if the case cannot be set up
+   */
+  public static CaseProblem of(CaseFile caseFile, double scale) {
+    ChamberShape shape = ChamberShape.of(caseFile, scale);
+    return on(caseFile, shape);
+  }
+
+  /** The operators of a case on a given mesh of its shape. */
+  static CaseProblem on(CaseFile caseFile, ChamberShape shape) {
+    CaseGas gas = new CaseGas(caseFile);
+    Medium medium = gas.on(shape.mesh());
+    CaseFlames flames = new CaseFlames(caseFile);
+    if (shape.cells().isPresent() && flames.allBurnersAlike()) {
+      RingCells cells = shape.cells().get();
+      BlochAssembly bloch =
+          builder(caseFile, cells.half(), shape, gas.on(cells.half())).bloch(cells);
+      List<Part> parts = new ArrayList<>();
+      for (int q = 0; q <= bloch.largestNumber(); q++) {
+        parts.add(new Part("Bloch number " + q, null, bloch.multiplicity(q), bloch.number(q)));
+      }
+      return new CaseProblem(
+          shape,
+          medium,
+          parts,
+          String.format(
+              Locale.ROOT,
+              "All %d burners are alike: one burner cell is solved for each Bloch number 0 to %d.",
+              cells.count(),
+              bloch.largestNumber()));
+    }
+    ProblemBuilder builder = builder(caseFile, shape.mesh(), shape, medium);
+    if (shape.geometry() instanceof Section) {
+      SectionAssembly section = builder.section();
+      List<Part> parts = new ArrayList<>();
+      for (int m : caseFile.azimuthalOrders()) {
+        parts.add(new Part("order " + m, m, m == 0 ? 1 : 2, section.order(m)));
+      }
+      return new CaseProblem(
+          shape, medium, parts, "Each azimuthal order of the section is solved by itself.");
+    }
+    String method =
+        shape.cells().isPresent()
+            ? "The burners differ: the whole ring is solved."
+            : "The plane is solved as a whole.";
+    return new CaseProblem(
+        shape, medium, List.of(new Part("", null, 1, builder.build())), method);
+  }
+
+  private static ProblemBuilder builder(
+      CaseFile caseFile, Mesh mesh, ChamberShape shape, Medium medium) {
+    ProblemBuilder b = new ProblemBuilder(mesh, shape.geometry(), medium);
+    CaseWalls.put(caseFile, b);
+    new CaseFlames(caseFile).all().forEach(b::flame);
+    return b;
+  }
+}

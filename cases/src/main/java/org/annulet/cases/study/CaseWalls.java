@@ -1,0 +1,70 @@
+package org.annulet.cases.study;
+
+import java.util.List;
+import org.annulet.cases.read.CaseFaultException;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.Wall;
+import org.annulet.solver.assembly.Face;
+import org.annulet.solver.assembly.ProblemBuilder;
+import org.annulet.solver.boundary.Admittance;
+import org.annulet.solver.boundary.ChokedNozzle;
+import org.annulet.solver.boundary.Impedance;
+import org.annulet.solver.boundary.OpenEnd;
+import org.annulet.solver.boundary.Rigid;
+import org.apache.commons.math3.complex.Complex;
+
+/** The walls of a case on a problem. */
+final class CaseWalls {
+  private static final String INNER = ".inner_face";
+  private static final String OUTER = ".outer_face";
+
+  private CaseWalls() {}
+
+  /**
+   * Puts every wall of the case on its edge or face.
+   *
+   * @throws CaseFaultException if an edge cannot carry the wall
+   */
+  static void put(CaseFile caseFile, ProblemBuilder builder) {
+    caseFile
+        .walls()
+        .forEach(
+            (name, wall) -> {
+              try {
+                if (name.endsWith(INNER)) {
+                  builder.face(stem(name, INNER), Face.INNER, solverWall(wall));
+                } else if (name.endsWith(OUTER)) {
+                  builder.face(stem(name, OUTER), Face.OUTER, solverWall(wall));
+                } else {
+                  builder.wall(name, solverWall(wall));
+                }
+              } catch (IllegalArgumentException e) {
+                throw new CaseFaultException(
+                    List.of(
+                        caseFile
+                            .source()
+                            .problem("walls." + name, e.getMessage(), "name a boundary edge")));
+              }
+            });
+  }
+
+  private static String stem(String name, String ending) {
+    return name.substring(0, name.length() - ending.length());
+  }
+
+  private static org.annulet.solver.boundary.Wall solverWall(Wall wall) {
+    if (wall instanceof Wall.Open) {
+      return new OpenEnd();
+    }
+    if (wall instanceof Wall.Impedance z) {
+      return new Impedance(new Complex(z.re(), z.im()));
+    }
+    if (wall instanceof Wall.Admittance y) {
+      return new Admittance(new Complex(y.re(), y.im()));
+    }
+    if (wall instanceof Wall.ChokedNozzle nozzle) {
+      return new ChokedNozzle(nozzle.mach());
+    }
+    return new Rigid();
+  }
+}
