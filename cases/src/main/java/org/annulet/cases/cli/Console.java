@@ -1,6 +1,7 @@
 package org.annulet.cases.cli;
 
 import java.io.PrintStream;
+import java.io.PrintWriter;
 import java.util.Locale;
 import org.annulet.cases.study.Progress;
 
@@ -20,6 +21,19 @@ final class Console {
 
   void beQuiet() {
     quiet = true;
+  }
+
+  PrintWriter outWriter() {
+    return new PrintWriter(out, true);
+  }
+
+  PrintWriter errWriter() {
+    return new PrintWriter(err, true);
+  }
+
+  /** The whole chain of a fault of the program itself, for those who asked for it. */
+  void trace(Exception e) {
+    e.printStackTrace(err);
   }
 
   /** A result the user asked for; left out when quiet. */
