@@ -5,6 +5,7 @@ import java.nio.file.Path;
 import java.util.concurrent.Callable;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseReader;
+import org.annulet.cases.read.Reading;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
@@ -42,7 +43,9 @@ abstract class Verb implements Callable<Integer> {
     if (quiet) {
       console.beQuiet();
     }
-    CaseFile caseFile = CaseReader.read(casePath);
+    Reading reading = CaseReader.read(casePath);
+    CaseFile caseFile = reading.orThrow();
+    reading.cautions().forEach(c -> console.fault("note: " + c));
     Path parent = caseFile.file().toAbsolutePath().getParent();
     return run(caseFile, out == null ? parent.resolve("out") : out).code();
   }

@@ -3,7 +3,6 @@ package org.annulet.cases.study;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
-import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.Flame;
 import org.annulet.cases.read.Geometry;
@@ -72,23 +71,13 @@ final class CaseFlames {
     }
     return ring.zones().stream()
         .filter(z -> z instanceof Geometry.Ducts)
-        .mapToDouble(z -> ((Geometry.Ducts) z).width())
+        .mapToDouble(z -> ((Geometry.Ducts) z).bore())
         .findFirst()
         .orElse(Double.POSITIVE_INFINITY);
   }
 
   private Reference reference(Flame f) {
     if (f.reference() instanceof Flame.EdgeFlux edge) {
-      if (edge.side() != Flame.Side.UPSTREAM) {
-        throw new CaseFaultException(
-            List.of(
-                caseFile
-                    .source()
-                    .problem(
-                        "flames." + f.name() + ".reference.side",
-                        "the velocity at an edge is taken on its upstream side in this version",
-                        "write 'side: upstream', or take a patch of the zone downstream")));
-      }
       return new Reference.EdgeFlux(
           edge.edge(), new Side.InZone(edge.flowFrom()), f.referenceVelocity());
     }

@@ -135,7 +135,7 @@ public record ChamberShape(
       if (z instanceof Geometry.Annulus a) {
         zones.add(RingZone.annulus(a.name(), a.meanRadius(), a.gap(), a.length()));
       } else if (z instanceof Geometry.Ducts d) {
-        zones.add(RingZone.ducts(d.name(), d.meanRadius(), d.width(), d.length()));
+        zones.add(RingZone.ducts(d.name(), d.meanRadius(), d.bore(), d.length()));
       }
     }
     return new RingShape(ring.burnerCount(), ring.unrolledRadius(), zones);
@@ -147,7 +147,7 @@ public record ChamberShape(
       double height =
           z instanceof Geometry.Annulus a
               ? a.gap()
-              : ((Geometry.Ducts) z).area() / ((Geometry.Ducts) z).width();
+              : Math.PI / 4 * ((Geometry.Ducts) z).bore();
       zones.put(z.name(), new Ring.Annulus(z.meanRadius(), height));
     }
     return new Ring(ring.burnerCount(), ring.unrolledRadius(), zones);
