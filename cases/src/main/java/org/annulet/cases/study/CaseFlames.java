@@ -58,22 +58,7 @@ final class CaseFlames {
     }
     Flame.Spread spread = (Flame.Spread) place;
     return new Place.Spread(
-        new Patch(spread.zone(), spread.from(), spread.to(), width(spread.width())));
-  }
-
-  /** Width of a spread flame on a ring; 0 stands for that of the burner's duct. */
-  private double width(double stated) {
-    if (!(caseFile.geometry() instanceof Geometry.Ring ring)) {
-      return Double.POSITIVE_INFINITY;
-    }
-    if (stated > 0) {
-      return stated;
-    }
-    return ring.zones().stream()
-        .filter(z -> z instanceof Geometry.Ducts)
-        .mapToDouble(z -> ((Geometry.Ducts) z).bore())
-        .findFirst()
-        .orElse(Double.POSITIVE_INFINITY);
+        new Patch(spread.zone(), spread.from(), spread.to(), spread.width()));
   }
 
   private Reference reference(Flame f) {
