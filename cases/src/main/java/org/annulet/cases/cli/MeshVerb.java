@@ -12,7 +12,7 @@ import picocli.CommandLine.Command;
 final class MeshVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
-    ChamberShape shape = ChamberShape.of(caseFile, 1);
+    ChamberShape shape = ChamberShape.of(caseFile);
     console().result(Quality.of(shape.mesh()).toString());
     return ExitStatus.DONE;
   }

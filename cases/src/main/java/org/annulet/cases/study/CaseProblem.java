@@ -34,21 +34,11 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
    */
   public record Part(String name, Integer order, int copies, AssembledProblem assembled) {}
 
-  /** Smallest number of triangle sides in the shortest wavelength that is taken without a warning. */
-  static final double POINTS_PER_WAVELENGTH = 10;
-
   /**
-   * The operators of a case.
+   * The operators of a case on a mesh of its shape.
    *
-   * @param scale factor on all sizes of triangles
    * @throws CaseFaultException if the case cannot be set up
    */
-  public static CaseProblem of(CaseFile caseFile, double scale) {
-    ChamberShape shape = ChamberShape.of(caseFile, scale);
-    return on(caseFile, shape);
-  }
-
-  /** The operators of a case on a given mesh of its shape. */
   static CaseProblem on(CaseFile caseFile, ChamberShape shape) {
     CaseGas gas = new CaseGas(caseFile);
     Medium medium = gas.on(shape.mesh());

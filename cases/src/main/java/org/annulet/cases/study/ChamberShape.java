@@ -14,8 +14,11 @@ import org.annulet.mesher.geometry.Outline;
 import org.annulet.mesher.geometry.RingShape;
 import org.annulet.mesher.geometry.RingShape.RingZone;
 import org.annulet.mesher.geometry.Zone;
+import org.annulet.mesher.mesh.EdgeCurves;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.mesher.mesh.RingCells;
+import org.annulet.mesher.mesh.RingReplication;
+import org.annulet.mesher.mesh.UniformRefinement;
 import org.annulet.mesher.triangulate.MeshingLimitException;
 import org.annulet.mesher.triangulate.OutlineMesher;
 import org.annulet.mesher.triangulate.RingMesher;
@@ -36,14 +39,21 @@ public record ChamberShape(
     Mesh mesh, Optional<RingCells> cells, org.annulet.solver.assembly.Geometry geometry) {
 
   /**
-   * Meshes the geometry of a case.
+   * Nested meshes of a case, from coarse to fine: each is the one before with every triangle cut into four, new boundary nodes on the
+   * true curves.
    *
-   * @param scale factor on all sizes of triangles: 1 for the mesh the case asks for
+   * @param levels how many, at least 1
+   * @param scale factor on all sizes of triangles of the finest: 1 for the mesh the case asks for
    * @throws CaseFaultException if the outline cannot be meshed; every fault with its place
    */
-  public static ChamberShape of(CaseFile caseFile, double scale) {
+  public static List<ChamberShape> ladder(CaseFile caseFile, int levels, double scale) {
+    List<ChamberShape> ladder = new ArrayList<>();
     try {
-      return mesh(caseFile, scale);
+      EdgeCurves curves = curves(caseFile);
+      ladder.add(mesh(caseFile, scale * (1 << (levels - 1))));
+      for (int i = 1; i < levels; i++) {
+        ladder.add(ladder.get(i - 1).refined(curves));
+      }
     } catch (GeometryFault e) {
       List<Problem> problems = new ArrayList<>();
       for (GeometryFault.Fault f : e.faults()) {
@@ -58,6 +68,42 @@ public record ChamberShape(
                   .source()
                   .problem("geometry.mesh_size", e.getMessage(), "choose larger triangles")));
     }
+    return ladder;
+  }
+
+  /** The mesh a case asks for. */
+  public static ChamberShape of(CaseFile caseFile) {
+    return ladder(caseFile, 1, 1).get(0);
+  }
+
+  private ChamberShape refined(EdgeCurves curves) {
+    if (cells.isPresent()) {
+      RingCells old = cells.get();
+      Mesh half = UniformRefinement.of(old.half()).mesh();
+      RingCells fine = RingReplication.of(half, old.count(), old.whole().period() / old.count());
+      return new ChamberShape(fine.whole(), Optional.of(fine), geometry);
+    }
+    return new ChamberShape(UniformRefinement.of(mesh, curves).mesh(), cells, geometry);
+  }
+
+  private static EdgeCurves curves(CaseFile caseFile) {
+    org.annulet.cases.read.Outline read = outline(caseFile.geometry());
+    if (read == null) {
+      return EdgeCurves.STRAIGHT;
+    }
+    Outline outline = outline(read);
+    return (edge, start, end) ->
+        outline.edge(edge).closest(0.5 * (start[0] + end[0]), 0.5 * (start[1] + end[1]));
+  }
+
+  private static org.annulet.cases.read.Outline outline(Geometry g) {
+    if (g instanceof Geometry.Section section) {
+      return section.outline();
+    }
+    if (g instanceof Geometry.CrossSection cross) {
+      return cross.outline();
+    }
+    return g instanceof Geometry.Plane plane ? plane.outline() : null;
   }
 
   private static ChamberShape mesh(CaseFile caseFile, double scale) {
@@ -99,6 +145,10 @@ public record ChamberShape(
       org.annulet.cases.read.Outline read,
       Sizing sizing,
       org.annulet.solver.assembly.Geometry geometry) {
+    return new ChamberShape(OutlineMesher.mesh(outline(read), sizing), Optional.empty(), geometry);
+  }
+
+  private static Outline outline(org.annulet.cases.read.Outline read) {
     Outline.Builder b = Outline.builder();
     read.points().forEach((name, p) -> b.point(name, p.x(), p.y()));
     read.edges()
@@ -112,7 +162,7 @@ public record ChamberShape(
               }
             });
     read.zones().forEach((name, z) -> b.zone(new Zone(name, z.boundary(), z.holes())));
-    return new ChamberShape(OutlineMesher.mesh(b.build(), sizing), Optional.empty(), geometry);
+    return b.build();
   }
 
   private static Sizing sizing(Geometry.MeshSize size, List<String> zones) {

@@ -1,6 +1,7 @@
 package org.annulet.cases.study;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
@@ -20,11 +21,15 @@ import org.annulet.solver.assembly.Ring;
 import org.annulet.solver.assembly.Section;
 import org.annulet.solver.eigen.ModeSearch;
 import org.annulet.solver.eigen.SearchSettings;
+import org.annulet.solver.modes.MeshError;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.modes.ModeSet;
 
 /** Every mode of a case in its window, labelled and certified. */
 public final class ModesStudy {
+  /** Nested meshes: three show the order of convergence of each mode. */
+  private static final int LEVELS = 3;
+
   private final CaseFile caseFile;
   private final Progress progress;
 
@@ -50,8 +55,12 @@ public final class ModesStudy {
    */
   public Answer run(String version) {
     progress.step("meshing and assembling", 0, 1);
-    CaseProblem problem = CaseProblem.of(caseFile, 1);
-    Found found = search(problem);
+    List<CaseProblem> ladder =
+        ChamberShape.ladder(caseFile, LEVELS, 1).stream()
+            .map(shape -> CaseProblem.on(caseFile, shape))
+            .toList();
+    CaseProblem problem = ladder.get(LEVELS - 1);
+    Found found = search(ladder);
     Chamber chamber = chamber(problem);
     List<ModeEntry> inside = label(chamber, found.inside);
     List<ModeEntry> outside = label(chamber, found.outside);
@@ -75,31 +84,31 @@ public final class ModesStudy {
     final List<ModeView> outside = new ArrayList<>();
   }
 
-  private Found search(CaseProblem problem) {
+  /** Modes of one operator, those in the margin after those in the window, with their error bars. */
+  private record Solved(ModeSet set, List<Optional<MeshError>> bars) {}
+
+  private Found search(List<CaseProblem> ladder) {
+    CaseProblem problem = ladder.get(ladder.size() - 1);
     int n = problem.parts().size();
     int[] done = {0};
     // Parts are independent; the results are put together in their order, so the number of cores changes nothing.
-    List<ModeSet> sets =
+    List<Solved> all =
         IntStream.range(0, n)
             .parallel()
             .mapToObj(
                 i -> {
-                  ModeSet set =
-                      ModeSearch.find(
-                          problem.parts().get(i).assembled().operator(),
-                          caseFile.window(),
-                          SearchSettings.standard());
+                  Solved solved = solve(ladder, i);
                   synchronized (done) {
                     progress.step("searching and counting modes", ++done[0], n);
                   }
-                  return set;
+                  return solved;
                 })
             .toList();
     Optional<MirrorImage> mirror = problem.shape().cells().map(MirrorImage::new);
     Found found = new Found();
     for (int i = 0; i < n; i++) {
       CaseProblem.Part part = problem.parts().get(i);
-      ModeSet set = sets.get(i);
+      ModeSet set = all.get(i).set;
       Certificate c = Certificate.of(part.name(), part.order(), set);
       found.certificates.add(
           new Certificate(
@@ -109,8 +118,11 @@ public final class ModesStudy {
               c.found() * part.copies(),
               c.complete(),
               c.notes()));
-      set.modes().forEach(m -> add(found.inside, part, m, mirror));
-      set.outside().forEach(m -> add(found.outside, part, m, mirror));
+      List<Mode> modes = all(set);
+      for (int k = 0; k < modes.size(); k++) {
+        List<ModeView> views = k < set.modes().size() ? found.inside : found.outside;
+        views.addAll(views(part, modes.get(k), all.get(i).bars.get(k), mirror));
+      }
     }
     Comparator<ModeView> order =
         Comparator.<ModeView>comparingDouble(v -> v.mode().frequency())
@@ -120,36 +132,61 @@ public final class ModesStudy {
     return found;
   }
 
-  /** A mode as one entry, or as two where the operator stands for both turning directions. */
-  private static void add(
-      List<ModeView> views, CaseProblem.Part part, Mode mode, Optional<MirrorImage> mirror) {
-    NodalField p = part.assembled().expand(mode.re(), mode.im());
-    Mode counted =
-        part.copies() == 1
-            ? mode
-            : new Mode(
-                mode.growthRate(),
-                mode.frequency(),
-                mode.re(),
-                mode.im(),
-                mode.multiplicity() * part.copies(),
-                mode.backwardError(),
-                mode.iterations(),
-                mode.verdict());
-    views.add(
-        new ModeView(counted, p.re(), p.im(), part.order(), part.name(), Double.NaN, Double.NaN));
-    if (part.copies() == 2) {
-      boolean section = part.order() != null;
-      views.add(
-          new ModeView(
-              counted,
-              section ? p.re() : mirror.orElseThrow().of(p.re()),
-              section ? p.im() : mirror.orElseThrow().of(p.im()),
-              section ? Integer.valueOf(-part.order()) : null,
-              part.name(),
-              Double.NaN,
-              Double.NaN));
+  private Solved solve(List<CaseProblem> ladder, int part) {
+    List<ModeSet> sets = new ArrayList<>();
+    for (CaseProblem level : ladder) {
+      sets.add(
+          ModeSearch.find(
+              level.parts().get(part).assembled().operator(),
+              caseFile.window(),
+              SearchSettings.standard()));
     }
+    ModeSet finest = sets.get(sets.size() - 1);
+    List<Optional<MeshError>> bars =
+        sets.size() < LEVELS
+            ? Collections.nCopies(all(finest).size(), Optional.empty())
+            : ErrorBars.of(all(sets.get(0)), all(sets.get(1)), all(finest));
+    return new Solved(finest, bars);
+  }
+
+  private static List<Mode> all(ModeSet set) {
+    List<Mode> modes = new ArrayList<>(set.modes());
+    modes.addAll(set.outside());
+    return modes;
+  }
+
+  /** A mode as one entry, or as two where the operator stands for both turning directions. */
+  private static List<ModeView> views(
+      CaseProblem.Part part, Mode mode, Optional<MeshError> bar, Optional<MirrorImage> mirror) {
+    NodalField p = part.assembled().expand(mode.re(), mode.im());
+    double f = bar.map(MeshError::frequency).orElse(Double.NaN);
+    double g = bar.map(MeshError::growthRate).orElse(Double.NaN);
+    if (part.copies() == 1) {
+      return List.of(new ModeView(mode, p.re(), p.im(), part.order(), part.name(), f, g));
+    }
+    Mode twice =
+        new Mode(
+            mode.growthRate(),
+            mode.frequency(),
+            mode.re(),
+            mode.im(),
+            mode.multiplicity() * part.copies(),
+            mode.backwardError(),
+            mode.iterations(),
+            mode.verdict());
+    ModeView one = new ModeView(twice, p.re(), p.im(), part.order(), part.name(), f, g);
+    ModeView other =
+        part.order() != null
+            ? new ModeView(twice, p.re(), p.im(), -part.order(), part.name(), f, g)
+            : new ModeView(
+                twice,
+                mirror.orElseThrow().of(p.re()),
+                mirror.orElseThrow().of(p.im()),
+                null,
+                part.name(),
+                f,
+                g);
+    return List.of(one, other);
   }
 
   private static List<ModeEntry> label(Chamber chamber, List<ModeView> views) {
