@@ -110,7 +110,9 @@ class RingAgainstTransferMatrixTest {
     double cold = Math.sqrt(1.371 * 287 * 650);
     double hot = Math.sqrt(1.288 * 297 * 1740);
     double dense = p / (287 * 650);
-    double strength = 0.288 * heat / (1.288 * p * area[1] * VELOCITY) * GAIN;
+    // A thin flame between two gases: (γ − 1)/γ is the mean of its two sides.
+    double expansion = 0.5 * (0.371 / 1.371 + 0.288 / 1.288);
+    double strength = expansion * heat / (p * area[1] * VELOCITY) * GAIN;
     return new RingTransferMatrix(
         area,
         new double[] {0.2, 0.1, 0.31},
