@@ -5,7 +5,9 @@ import org.annulet.cases.read.CaseFile;
 import picocli.CommandLine.Command;
 
 /** {@code annulet check CASE}. */
-@Command(name = "check", description = "Says what was understood of a case, in SI, and what looks wrong.")
+@Command(
+    name = "check",
+    description = "Says what was understood of a case, in SI, and what looks wrong.")
 final class CheckVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) {

@@ -1,7 +1,7 @@
 package org.annulet.cases.cli;
 
-import java.io.FileOutputStream;
 import java.io.FileDescriptor;
+import java.io.FileOutputStream;
 import java.io.IOException;
 import java.io.PrintStream;
 import java.nio.charset.StandardCharsets;
@@ -37,7 +37,8 @@ public final class Main implements Runnable {
   public static void main(String[] args) {
     Console console =
         new Console(
-            new PrintStream(new FileOutputStream(FileDescriptor.out), false, StandardCharsets.UTF_8),
+            new PrintStream(
+                new FileOutputStream(FileDescriptor.out), false, StandardCharsets.UTF_8),
             new PrintStream(new FileOutputStream(FileDescriptor.err), true, StandardCharsets.UTF_8),
             Boolean.getBoolean("annulet.terminal"));
     System.exit(run(console, args).code());
@@ -96,13 +97,17 @@ public final class Main implements Runnable {
         console.fault(p.toString());
       }
       int n = fault.problems().size();
-      console.fault(n == 1 ? "annulet: 1 fault in the case" : "annulet: " + n + " faults in the case");
+      console.fault(
+          n == 1 ? "annulet: 1 fault in the case" : "annulet: " + n + " faults in the case");
       return ExitStatus.INPUT_FAULT;
     }
     if (e instanceof FileSystemException file) {
       String reason = file.getReason() == null ? file.getClass().getSimpleName() : file.getReason();
       console.fault(
-          "annulet: " + file.getFile() + ": " + reason
+          "annulet: "
+              + file.getFile()
+              + ": "
+              + reason
               + "\n    mend: give a folder that can be written with --out");
       return ExitStatus.OUT_OF_RESOURCES;
     }

@@ -16,8 +16,7 @@ import picocli.CommandLine.Command;
 final class ModesVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
-    ModesStudy.Answer answer =
-        new ModesStudy(caseFile, console().progress()).run(Version.text());
+    ModesStudy.Answer answer = new ModesStudy(caseFile, console().progress()).run(Version.text());
     ModesFiles.write(folder, answer);
     console().result(TextTables.terminal(answer.results()));
     Summary.sentences(answer.results()).forEach(console()::result);

@@ -42,7 +42,8 @@ final class CaseFlames {
         }
       }
     }
-    return new org.annulet.solver.flame.Flame(f.name(), place(f.place()), reference(f), rule, staging);
+    return new org.annulet.solver.flame.Flame(
+        f.name(), place(f.place()), reference(f), rule, staging);
   }
 
   private static NTau response(Flame.Response response) {
@@ -57,8 +58,7 @@ final class CaseFlames {
           : new Place.Sheet(sheet.edge());
     }
     Flame.Spread spread = (Flame.Spread) place;
-    return new Place.Spread(
-        new Patch(spread.zone(), spread.from(), spread.to(), spread.width()));
+    return new Place.Spread(new Patch(spread.zone(), spread.from(), spread.to(), spread.width()));
   }
 
   private Reference reference(Flame f) {

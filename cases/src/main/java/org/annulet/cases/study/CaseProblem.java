@@ -15,8 +15,9 @@ import org.annulet.solver.assembly.SectionAssembly;
 import org.annulet.solver.medium.Medium;
 
 /**
- * A case as the operators to be solved: one for each azimuthal order of a section, one for each Bloch number of a ring whose burners
- * are all alike, one for a whole ring with staged burners, one for a plane.
+ * A case as the operators to be solved: one for each azimuthal order of a section, one for each
+ * Bloch number of a ring whose burners are all alike, one for a whole ring with staged burners, one
+ * for a plane.
  *
  * @param shape mesh and geometry
  * @param medium gas on the triangles of the whole mesh
@@ -29,7 +30,8 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
    *
    * @param name for the reader ("order 1")
    * @param order azimuthal order; null where the operator has none of its own
-   * @param copies modes of the chamber behind each eigenvalue: 2 where the operator stands for a turning wave and its mirror image
+   * @param copies modes of the chamber behind each eigenvalue: 2 where the operator stands for a
+   *     turning wave and its mirror image
    * @param assembled operator and expansion
    */
   public record Part(String name, Integer order, int copies, AssembledProblem assembled) {}
@@ -75,8 +77,7 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
         shape.cells().isPresent()
             ? "The burners differ: the whole ring is solved."
             : "The plane is solved as a whole.";
-    return new CaseProblem(
-        shape, medium, List.of(new Part("", null, 1, builder.build())), method);
+    return new CaseProblem(shape, medium, List.of(new Part("", null, 1, builder.build())), method);
   }
 
   private static ProblemBuilder builder(

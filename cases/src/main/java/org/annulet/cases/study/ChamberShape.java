@@ -39,8 +39,8 @@ public record ChamberShape(
     Mesh mesh, Optional<RingCells> cells, org.annulet.solver.assembly.Geometry geometry) {
 
   /**
-   * Nested meshes of a case, from coarse to fine: each is the one before with every triangle cut into four, new boundary nodes on the
-   * true curves.
+   * Nested meshes of a case, from coarse to fine: each is the one before with every triangle cut
+   * into four, new boundary nodes on the true curves.
    *
    * @param levels how many, at least 1
    * @param scale factor on all sizes of triangles of the finest: 1 for the mesh the case asks for
@@ -58,7 +58,8 @@ public record ChamberShape(
       List<Problem> problems = new ArrayList<>();
       for (GeometryFault.Fault f : e.faults()) {
         String[] text = f.toString().split("\\R\\s*mend: ", 2);
-        problems.add(caseFile.source().problem("geometry", text[0], text.length > 1 ? text[1] : ""));
+        problems.add(
+            caseFile.source().problem("geometry", text[0], text.length > 1 ? text[1] : ""));
       }
       throw new CaseFaultException(problems);
     } catch (MeshingLimitException e) {
@@ -195,9 +196,7 @@ public record ChamberShape(
     Map<String, Ring.Annulus> zones = new LinkedHashMap<>();
     for (Geometry.RingZone z : ring.zones()) {
       double height =
-          z instanceof Geometry.Annulus a
-              ? a.gap()
-              : Math.PI / 4 * ((Geometry.Ducts) z).bore();
+          z instanceof Geometry.Annulus a ? a.gap() : Math.PI / 4 * ((Geometry.Ducts) z).bore();
       zones.put(z.name(), new Ring.Annulus(z.meanRadius(), height));
     }
     return new Ring(ring.burnerCount(), ring.unrolledRadius(), zones);

@@ -9,10 +9,11 @@ import org.annulet.solver.modes.MeshError;
 import org.annulet.solver.modes.Mode;
 
 /**
- * Error bars of the modes of one operator from the modes of the same operator on two coarser nested meshes.
+ * Error bars of the modes of one operator from the modes of the same operator on two coarser nested
+ * meshes.
  *
- * <p>Modes of different meshes are matched one to one, closest pairs first; a mode whose partner is missing on a coarser mesh, or
- * not clearly the nearest, has no error bar.
+ * <p>Modes of different meshes are matched one to one, closest pairs first; a mode whose partner is
+ * missing on a coarser mesh, or not clearly the nearest, has no error bar.
  */
 final class ErrorBars {
   /** A partner further away than this part of |s| is no partner. */
@@ -55,7 +56,8 @@ final class ErrorBars {
     for (int i = 0; i < from.size(); i++) {
       for (int j = 0; j < to.size(); j++) {
         double d = distance(from.get(i), to.get(j));
-        if (d < REACH * Math.hypot(from.get(i).growthRate(), 2 * Math.PI * from.get(i).frequency())) {
+        if (d
+            < REACH * Math.hypot(from.get(i).growthRate(), 2 * Math.PI * from.get(i).frequency())) {
           couples.add(new Couple(i, j, d));
         }
       }

@@ -7,8 +7,8 @@ import org.annulet.mesher.mesh.Mesh;
 import org.annulet.mesher.mesh.RingCells;
 
 /**
- * The mirror image of a field on a ring, about the centre line of burner 1: turns a wave that runs one way round into the one that
- * runs the other way.
+ * The mirror image of a field on a ring, about the centre line of burner 1: turns a wave that runs
+ * one way round into the one that runs the other way.
  */
 final class MirrorImage {
   private final int[] image;
@@ -25,11 +25,13 @@ final class MirrorImage {
     image = new int[mesh.nodeCount()];
     double zero = 1e-9 * mesh.period();
     for (List<Integer> same : images) {
-      // The arcs y of the images of one node of the half cell are their own mirror image: y = 0 maps to itself, the k-th of the
+      // The arcs y of the images of one node of the half cell are their own mirror image: y = 0
+      // maps to itself, the k-th of the
       // others to the k-th last.
       same.sort(Comparator.comparingDouble(mesh::y));
       int first = 0;
-      if (!same.isEmpty() && Math.min(mesh.y(same.get(0)), mesh.period() - mesh.y(same.get(0))) < zero) {
+      if (!same.isEmpty()
+          && Math.min(mesh.y(same.get(0)), mesh.period() - mesh.y(same.get(0))) < zero) {
         image[same.get(0)] = same.get(0);
         first = 1;
       }

@@ -84,14 +84,17 @@ public final class ModesStudy {
     final List<ModeView> outside = new ArrayList<>();
   }
 
-  /** Modes of one operator, those in the margin after those in the window, with their error bars. */
+  /**
+   * Modes of one operator, those in the margin after those in the window, with their error bars.
+   */
   private record Solved(ModeSet set, List<Optional<MeshError>> bars) {}
 
   private Found search(List<CaseProblem> ladder) {
     CaseProblem problem = ladder.get(ladder.size() - 1);
     int n = problem.parts().size();
     int[] done = {0};
-    // Parts are independent; the results are put together in their order, so the number of cores changes nothing.
+    // Parts are independent; the results are put together in their order, so the number of cores
+    // changes nothing.
     List<Solved> all =
         IntStream.range(0, n)
             .parallel()

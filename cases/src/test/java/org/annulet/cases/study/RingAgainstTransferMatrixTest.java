@@ -16,7 +16,10 @@ import org.apache.commons.math3.complex.Complex;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
-/** A whole plenum–burner–chamber ring, from its case file, against its one-dimensional transfer matrix for order 0. */
+/**
+ * A whole plenum–burner–chamber ring, from its case file, against its one-dimensional transfer
+ * matrix for order 0.
+ */
 class RingAgainstTransferMatrixTest {
   private static final double HEAT = 15.5e6;
   private static final double VELOCITY = 57;
@@ -28,7 +31,8 @@ class RingAgainstTransferMatrixTest {
 
   @Test
   void annuliInARow_orderZero_isTheTransferMatrix_withinTheErrorBars() throws IOException {
-    // Three annuli joined over the full circumference: order 0 is exactly one-dimensional, areas step with the gaps.
+    // Three annuli joined over the full circumference: order 0 is exactly one-dimensional, areas
+    // step with the gaps.
     double radius = 0.33;
     double[] gap = {0.08, 0.012, 0.115};
     double[] area = new double[3];
@@ -68,7 +72,8 @@ class RingAgainstTransferMatrixTest {
 
   @Test
   void burnerDucts_orderZero_tendsToTheTransferMatrix_inProportionToThePitch() throws IOException {
-    // The flow around the burner openings adds a length of the order of the pitch, which the one-dimensional model lacks: halving
+    // The flow around the burner openings adds a length of the order of the pitch, which the
+    // one-dimensional model lacks: halving
     // all transverse sizes must halve the difference.
     double[] difference = new double[2];
     for (int k = 0; k < 2; k++) {
@@ -79,8 +84,7 @@ class RingAgainstTransferMatrixTest {
       double annulus = 2 * Math.PI * radius * gap / BURNERS;
       double duct = Math.PI / 4 * bore * bore;
       double heat = HEAT / (shrink * shrink);
-      RingTransferMatrix exact =
-          exact(new double[] {annulus, duct, annulus}, heat / BURNERS);
+      RingTransferMatrix exact = exact(new double[] {annulus, duct, annulus}, heat / BURNERS);
       Results results =
           solve(
               String.format(
@@ -124,7 +128,8 @@ class RingAgainstTransferMatrixTest {
         DELAY);
   }
 
-  private Results solve(String zones, String sheet, double radiusMm, double size) throws IOException {
+  private Results solve(String zones, String sheet, double radiusMm, double size)
+      throws IOException {
     return solve(zones, sheet, radiusMm, 1, size);
   }
 

@@ -5,9 +5,10 @@ import java.util.List;
 import org.apache.commons.math3.complex.Complex;
 
 /**
- * The one-dimensional transfer-matrix model of plenum, burners and chamber for azimuthal order 0: closed form, independent of the
- * finite elements. Per burner sector p and volume flow U run through three uniform ducts (Munjal, Acoustics of Ducts and Mufflers,
- * from memory); across the flame U grows by 1 + N e^{−sτ}.
+ * The one-dimensional transfer-matrix model of plenum, burners and chamber for azimuthal order 0:
+ * closed form, independent of the finite elements. Per burner sector p and volume flow U run
+ * through three uniform ducts (Munjal, Acoustics of Ducts and Mufflers, from memory); across the
+ * flame U grows by 1 + N e^{−sτ}.
  */
 record RingTransferMatrix(
     double[] area,
@@ -22,8 +23,7 @@ record RingTransferMatrix(
   /** Vanishes where p̂, û of both sides of the chamber's outlet agree. */
   Complex determinant(Complex s) {
     Complex p = Complex.ONE;
-    Complex u =
-        new Complex(-inletAdmittance * area[0] / (density[0] * soundSpeed[0]));
+    Complex u = new Complex(-inletAdmittance * area[0] / (density[0] * soundSpeed[0]));
     for (int z = 0; z < 3; z++) {
       Complex k = s.multiply(length[z] / soundSpeed[z]);
       double impedance = density[z] * soundSpeed[z] / area[z];
@@ -42,8 +42,7 @@ record RingTransferMatrix(
     Complex s = start;
     for (int i = 0; i < 50; i++) {
       double h = 1e-5 * s.abs();
-      Complex slope =
-          determinant(s.add(h)).subtract(determinant(s.subtract(h))).divide(2 * h);
+      Complex slope = determinant(s.add(h)).subtract(determinant(s.subtract(h))).divide(2 * h);
       Complex step = determinant(s).divide(slope);
       s = s.subtract(step);
       if (step.abs() < 1e-11 * s.abs()) {

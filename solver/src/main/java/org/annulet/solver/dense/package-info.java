@@ -10,8 +10,8 @@
  *
  * <p>Real and imaginary parts live in separate arrays, column by column, so that the inner loops
  * run over bare indices. Sources: Golub and Van Loan, Matrix Computations (LU, Householder,
- * Hessenberg QR); Demmel and Veselić 1992 (accuracy of one-sided Jacobi), both from memory. No
- * Java library at hand computes eigenvalues of a general complex matrix. Sizes up to a few hundred;
+ * Hessenberg QR); Demmel and Veselić 1992 (accuracy of one-sided Jacobi), both from memory. No Java
+ * library at hand computes eigenvalues of a general complex matrix. Sizes up to a few hundred;
  * nothing here is blocked.
  */
 package org.annulet.solver.dense;

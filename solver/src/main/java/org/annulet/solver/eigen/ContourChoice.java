@@ -24,9 +24,7 @@ final class ContourChoice {
     double h = window.height();
     Rectangle reach = window.grown(LARGEST_MARGIN * w, LARGEST_MARGIN * h, 0);
     List<Complex> near =
-        avoid.stream()
-            .filter(s -> reach.grown(0.02 * w, 0.02 * h, 0).contains(s))
-            .toList();
+        avoid.stream().filter(s -> reach.grown(0.02 * w, 0.02 * h, 0).contains(s)).toList();
     double floor = Math.min(LARGEST_MARGIN * h, 0.5 * window.bottom());
     return new Rectangle(
         window.left() - margin(near, s -> window.left() - s.getReal(), w, LARGEST_MARGIN * w),

@@ -51,8 +51,22 @@ final class Lanczos {
       F2jARPACK arpack = new F2jARPACK();
       while (true) {
         arpack.dsaupd(
-            ido, "G", n, "LM", wanted, tol, resid, ncv, v, n, iparam, ipntr, workd, workl,
-            workl.length, info);
+            ido,
+            "G",
+            n,
+            "LM",
+            wanted,
+            tol,
+            resid,
+            ncv,
+            v,
+            n,
+            iparam,
+            ipntr,
+            workd,
+            workl,
+            workl.length,
+            info);
         if (ido.val == -1 || ido.val == 1) {
           double[] b = new double[n];
           if (ido.val == 1) {
@@ -78,8 +92,28 @@ final class Lanczos {
       }
       boolean[] select = new boolean[ncv];
       arpack.dseupd(
-          true, "A", select, d, z, n, shift, "G", n, "LM", nev, tol.val, resid, ncv, v, n, iparam,
-          ipntr, workd, workl, workl.length, info);
+          true,
+          "A",
+          select,
+          d,
+          z,
+          n,
+          shift,
+          "G",
+          n,
+          "LM",
+          nev,
+          tol.val,
+          resid,
+          ncv,
+          v,
+          n,
+          iparam,
+          ipntr,
+          workd,
+          workl,
+          workl.length,
+          info);
       if (info.val != 0) {
         throw new ArithmeticException(inWords("dseupd", info.val));
       }

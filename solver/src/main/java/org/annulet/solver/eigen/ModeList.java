@@ -27,8 +27,7 @@ final class ModeList {
   private record Single(
       Complex s, ComplexMatrix vector, double error, int steps, boolean converged, double bound) {}
 
-  static ModeList of(
-      Window window, Rectangle contour, List<Polish.Polished> found) {
+  static ModeList of(Window window, Rectangle contour, List<Polish.Polished> found) {
     List<Single> all = new ArrayList<>();
     double loosest = 0;
     for (Polish.Polished p : found) {

@@ -52,8 +52,7 @@ public final class ModeSearch {
     return new ModeSearch(prepared, window, settings, Spoilers.none()).run();
   }
 
-  ModeSearch(
-      PreparedOperator prepared, Window window, SearchSettings settings, Spoilers spoilers) {
+  ModeSearch(PreparedOperator prepared, Window window, SearchSettings settings, Spoilers spoilers) {
     this.prepared = prepared;
     this.window = window;
     this.wanted = Rectangle.of(window);
@@ -254,8 +253,7 @@ public final class ModeSearch {
     return delay;
   }
 
-  private List<Polish.Polished> polish(
-      SmallSearch.Outcome outcome, double[][] q, Rectangle reach) {
+  private List<Polish.Polished> polish(SmallSearch.Outcome outcome, double[][] q, Rectangle reach) {
     ComplexMatrix basis = ComplexMatrix.onColumns(q, new double[q.length][prepared.size()]);
     Polish polish = new Polish(prepared, settings.backwardError());
     return outcome.clusters().parallelStream()

@@ -59,8 +59,7 @@ final class ReducedBasis {
   /** Flame and port loads, and the walls' loads on the passive modes, orthonormalised. */
   private List<double[]> loads(PassiveModes.Spectrum passive) {
     List<double[]> loads = new ArrayList<>();
-    loads.addAll(
-        Arrays.asList(LowRank.dense(prepared.lowRank().left(), prepared.size())));
+    loads.addAll(Arrays.asList(LowRank.dense(prepared.lowRank().left(), prepared.size())));
     for (WallMatrix wall : prepared.walls()) {
       List<double[]> own = new ArrayList<>();
       for (double[] v : passive.vectors()) {

@@ -110,8 +110,7 @@ public final class RootCount {
           prepared.analysis().factorComplex(beside[0], beside[1]).logDeterminant();
       LogDeterminant here = at.sparseLogDeterminant();
       Complex rate =
-          new Complex(
-                  there.logModulus() - here.logModulus(), reduced(there.phase() - here.phase()))
+          new Complex(there.logModulus() - here.logModulus(), reduced(there.phase() - here.phase()))
               .divide(step);
       return new Sample(at.logDeterminant(), rate.add(at.smallRate()));
     };
@@ -186,10 +185,7 @@ public final class RootCount {
       return change.abs() <= LARGEST_CHANGE_WITHOUT_RATE;
     }
     Complex foretold =
-        rate(a, known)
-            .add(rate(b, known))
-            .multiply(b.s().subtract(a.s()))
-            .multiply(0.5);
+        rate(a, known).add(rate(b, known)).multiply(b.s().subtract(a.s())).multiply(0.5);
     return Math.abs(change.getImaginary()) <= LARGEST_TURN
         && change.subtract(foretold).abs() <= LARGEST_SURPRISE;
   }

@@ -49,8 +49,7 @@ final class SmallSearch {
   /** Searches, starting from so many tiles that each holds about ten of the roots expected. */
   Outcome run(int expected, int finer) {
     int ny = Math.max(1, (expected + 9) / 10) * finer;
-    int nx =
-        Math.max(1, (int) Math.round(region.width() / (2 * region.height() / ny))) * finer;
+    int nx = Math.max(1, (int) Math.round(region.width() / (2 * region.height() / ny))) * finer;
     List<Rectangle> tiles = new ArrayList<>();
     for (int j = 0; j < ny; j++) {
       for (int i = 0; i < nx; i++) {
@@ -62,9 +61,7 @@ final class SmallSearch {
     for (int depth = 0; depth < DEEPEST && !outcome.agreed(); depth++) {
       List<Complex> known = outcome.roots();
       List<Rectangle> lacking =
-          tiles.size() == 1
-              ? tiles
-              : tiles.stream().filter(tile -> !agrees(tile, known)).toList();
+          tiles.size() == 1 ? tiles : tiles.stream().filter(tile -> !agrees(tile, known)).toList();
       List<Rectangle> next = new ArrayList<>();
       for (Rectangle tile : lacking.isEmpty() ? tiles : lacking) {
         for (int q = 0; q < 4; q++) {
@@ -99,8 +96,7 @@ final class SmallSearch {
   /** Groups what was found into clusters and counts. */
   private Outcome settle() {
     List<Complex> sorted = new ArrayList<>(found);
-    sorted.sort(
-        Comparator.comparingDouble(Complex::getImaginary).thenComparing(Complex::getReal));
+    sorted.sort(Comparator.comparingDouble(Complex::getImaginary).thenComparing(Complex::getReal));
     List<Complex> centres = new ArrayList<>();
     for (Complex s : sorted) {
       if (centres.stream().noneMatch(c -> c.subtract(s).abs() < CLUSTER * s.abs())) {
@@ -115,8 +111,7 @@ final class SmallSearch {
     List<RootCluster> distinct = new ArrayList<>();
     for (RootCluster c : clusters) {
       if (distinct.stream()
-          .noneMatch(
-              d -> d.centre().subtract(c.centre()).abs() < 2 * CLUSTER * c.centre().abs())) {
+          .noneMatch(d -> d.centre().subtract(c.centre()).abs() < 2 * CLUSTER * c.centre().abs())) {
         distinct.add(c);
       }
     }

@@ -1,15 +1,18 @@
 package org.annulet.solver.modes;
 
 /**
- * What the mesh still costs an eigenvalue, from its values on three nested meshes whose triangle sides halve (Richardson).
+ * What the mesh still costs an eigenvalue, from its values on three nested meshes whose triangle
+ * sides halve (Richardson).
  *
- * <p>With s(h) = s + C h^p the observed order is p = log₂(|s(2h) − s(4h)| / |s(h) − s(2h)|) and the error of the finest value is
- * |s(h) − s(2h)| / (2^p − 1). Smooth fields give p = 2, re-entrant corners bring it down towards 1. The order is not trusted
- * outside [{@value #LOWEST_ORDER}, {@value #HIGHEST_ORDER}], and the estimate is stretched by {@value #SAFETY}.
+ * <p>With s(h) = s + C h^p the observed order is p = log₂(|s(2h) − s(4h)| / |s(h) − s(2h)|) and the
+ * error of the finest value is |s(h) − s(2h)| / (2^p − 1). Smooth fields give p = 2, re-entrant
+ * corners bring it down towards 1. The order is not trusted outside [{@value #LOWEST_ORDER},
+ * {@value #HIGHEST_ORDER}], and the estimate is stretched by {@value #SAFETY}.
  *
  * @param growthRate error bar of the growth rate in 1/s, not negative
  * @param frequency error bar of the frequency in Hz, not negative
- * @param observedOrder p as observed, before any limit; NaN when the differences are at rounding level
+ * @param observedOrder p as observed, before any limit; NaN when the differences are at rounding
+ *     level
  */
 public record MeshError(double growthRate, double frequency, double observedOrder) {
   /** Orders below it are taken for it; a corner with an unfavourable jump of weight has 1.06. */
@@ -40,7 +43,9 @@ public record MeshError(double growthRate, double frequency, double observedOrde
     double rounding = ROUNDING * Math.hypot(growth[2], turn * hertz[2]);
     double order = second > rounding ? Math.log(first / second) / Math.log(2) : Double.NaN;
     double trusted =
-        Double.isNaN(order) ? HIGHEST_ORDER : Math.max(LOWEST_ORDER, Math.min(HIGHEST_ORDER, order));
+        Double.isNaN(order)
+            ? HIGHEST_ORDER
+            : Math.max(LOWEST_ORDER, Math.min(HIGHEST_ORDER, order));
     double factor = SAFETY / (Math.pow(2, trusted) - 1);
     double floor = SHARE * second;
     return new MeshError(

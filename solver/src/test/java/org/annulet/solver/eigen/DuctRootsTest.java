@@ -11,9 +11,9 @@ import org.annulet.solver.modes.Window;
 import org.annulet.solver.operator.AcousticOperator;
 import org.annulet.solver.operator.AnalyticFunction;
 import org.apache.commons.math3.complex.Complex;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
-import org.junit.jupiter.api.Test;
 
 /**
  * Ducts with a flame sheet or an end impedance against the dispersion relation (reference values
@@ -47,9 +47,7 @@ class DuctRootsTest {
             1.5e-3,
             null,
             new Window(15.9, 800, -300, 300),
-            new double[][] {
-              {170.04473, 16.5843}, {340, 0}, {509.63594, 16.3352}, {680, 0}
-            }),
+            new double[][] {{170.04473, 16.5843}, {340, 0}, {509.63594, 16.3352}, {680, 0}}),
         new Row(
             "D2.passive",
             closedOpen,
@@ -209,8 +207,10 @@ class DuctRootsTest {
     // D3 at second order: (4 s(h/2) − s(h))/3 leaves the fourth power of kh
     Duct duct = new Duct(End.CLOSED, End.OPEN, 347, 850, 0.3);
     Window window = new Window(150, 600, -600, 600);
-    var coarse = ModeSearch.find(duct.withFlame(200, 5, 3e-3, null), window, SearchSettings.standard());
-    var fine = ModeSearch.find(duct.withFlame(400, 5, 3e-3, null), window, SearchSettings.standard());
+    var coarse =
+        ModeSearch.find(duct.withFlame(200, 5, 3e-3, null), window, SearchSettings.standard());
+    var fine =
+        ModeSearch.find(duct.withFlame(400, 5, 3e-3, null), window, SearchSettings.standard());
     double[][] exact = {{206.51919, 435.5250}, {426.70531, 363.3854}, {551.74653, -395.8363}};
     for (int i = 0; i < 3; i++) {
       Mode a = coarse.modes().get(i);

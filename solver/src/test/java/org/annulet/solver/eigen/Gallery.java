@@ -13,8 +13,8 @@ import org.apache.commons.math3.complex.Complex;
 
 /**
  * One-dimensional linear-element problems with roots known in closed form: ducts with a flame sheet
- * and an end impedance, rings with point flames or dampers. Divided by γp̄, so K = ∫ c² φ′φ′ and M =
- * ∫ φφ.
+ * and an end impedance, rings with point flames or dampers. Divided by γp̄, so K = ∫ c² φ′φ′ and M
+ * = ∫ φφ.
  */
 final class Gallery {
   private Gallery() {}
