@@ -18,9 +18,9 @@ import java.util.Map;
  * on its direction: between the harmonic mean (waves along it, layers in series) and the arithmetic
  * mean (waves across it, layers side by side), the bounds of Wiener 1912. Their spread is reported.
  *
- * <p>Points are gathered in cells of the data's median spacing; at each cell the space is sampled
- * along θ or r at that spacing by the same local fit as plane data, so a crowd of points on one
- * side does not weigh more.
+ * <p>Points are gathered in square cells as fine as the data's finest decile; at each cell the
+ * space is sampled along θ or r at the median spacing by the same local fit as plane data, so a
+ * crowd of points on one side does not weigh more.
  *
  * @param field on the plane
  * @param spacing side of the cells in m
@@ -31,6 +31,12 @@ public record CloudAverage(
     ScatteredTemperature field, double spacing, double largestSpread, double meanSpread) {
   /** Most samples of one average: some ten seconds. */
   private static final double MOST_SAMPLES = 3e6;
+
+  /** Samples a small cloud may always take. */
+  private static final double FREE_SAMPLES = 2e5;
+
+  /** Samples for each point of the cloud; more would tell nothing the points do not hold. */
+  private static final double SAMPLES_PER_POINT = 6;
 
   private static final int FEWEST = 8;
   private static final int MOST = 720;
@@ -47,7 +53,9 @@ public record CloudAverage(
     LocalFit fit = fit(cloud);
     double[] sector = span(theta);
     double width = sector[1];
-    Cells cells = Cells.of(cloud.x(), r, medianSpacing(fit), rr -> count(width * rr[1], rr[2]));
+    double[] spacing = spacings(fit);
+    Cells cells =
+        Cells.of(cloud.x(), r, spacing[0], c -> count(width * c[1], Math.max(spacing[1], c[2])));
     return cells.average(
         (x, rr, k, m) -> {
           double angle = sector[0] + width * (k + 0.5) / m;
@@ -85,9 +93,13 @@ public record CloudAverage(
     }
     LocalFit fit = fit(cloud);
     double gap = shell.outerRadius() - shell.innerRadius();
+    double[] spacing = spacings(fit);
     Cells cells =
         Cells.of(
-            Arrays.copyOf(x, n), Arrays.copyOf(arc, n), medianSpacing(fit), c -> count(gap, c[2]));
+            Arrays.copyOf(x, n),
+            Arrays.copyOf(arc, n),
+            spacing[0],
+            c -> count(gap, Math.max(spacing[1], c[2])));
     return cells.average(
         (xx, y, k, m) -> {
           double r = shell.innerRadius() + gap * (k + 0.5) / m;
@@ -105,8 +117,11 @@ public record CloudAverage(
     return (int) Math.max(FEWEST, Math.min(MOST, Math.ceil(length / spacing)));
   }
 
-  /** Median distance to the nearest other point, from at most 2000 points taken evenly. */
-  private static double medianSpacing(LocalFit fit) {
+  /**
+   * First decile and median of the distance to the nearest other point, from at most 2000 points
+   * taken evenly: the wall layers are as thin as the one, the bulk as coarse as the other.
+   */
+  private static double[] spacings(LocalFit fit) {
     PointTree tree = fit.tree();
     int step = Math.max(1, tree.size() / 2000);
     List<Double> found = new ArrayList<>();
@@ -126,7 +141,7 @@ public record CloudAverage(
       throw new IllegalArgumentException("all points of the cloud coincide");
     }
     found.sort(null);
-    return found.get(found.size() / 2);
+    return new double[] {found.get(found.size() / 10), found.get(found.size() / 2)};
   }
 
   /** First angle and width of the angles the data span: the circle without its largest gap. */
@@ -159,6 +174,7 @@ public record CloudAverage(
   /** Places on the plane: the mean positions of the points of each occupied square. */
   private record Cells(double[] x, double[] y, int[] samples, double spacing) {
     static Cells of(double[] x, double[] y, double finest, Counter counter) {
+      double most = Math.min(MOST_SAMPLES, Math.max(FREE_SAMPLES, SAMPLES_PER_POINT * x.length));
       for (double s = finest; ; s *= 1.26) {
         Map<Long, double[]> sums = new HashMap<>();
         List<double[]> inOrder = new ArrayList<>();
@@ -186,7 +202,7 @@ public record CloudAverage(
           samples[c] = counter.of(new double[] {cx[c], cy[c], s});
           total += samples[c];
         }
-        if (total <= MOST_SAMPLES) {
+        if (total <= most) {
           return new Cells(cx, cy, samples, s);
         }
       }

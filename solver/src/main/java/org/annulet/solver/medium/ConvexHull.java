@@ -5,7 +5,11 @@ import java.util.Comparator;
 
 /** The convex hull of plane points (monotone chain, Andrew 1979) and the distance from it. */
 final class ConvexHull {
+  /** Share of the hull's extent within which a point counts as on it: rounding of coordinates. */
+  private static final double ON_THE_HULL = 1e-9;
+
   private final double[][] corner;
+  private final double rounding;
 
   ConvexHull(double[] x, double[] y) {
     Integer[] order = new Integer[x.length];
@@ -27,6 +31,11 @@ final class ConvexHull {
       n--;
     }
     this.corner = Arrays.copyOf(chain, Math.max(1, n));
+    double extent = 0;
+    for (double[] c : corner) {
+      extent = Math.max(extent, Math.hypot(c[0] - corner[0][0], c[1] - corner[0][1]));
+    }
+    this.rounding = ON_THE_HULL * extent;
   }
 
   /** Distance of a point from the hull in m, 0 inside. */
@@ -40,7 +49,7 @@ final class ConvexHull {
       inside &= cross(a, b, q) >= 0;
       best = Math.min(best, toSegment(a, b, q));
     }
-    return inside ? 0 : best;
+    return inside || best <= rounding ? 0 : best;
   }
 
   private static double toSegment(double[] a, double[] b, double[] q) {

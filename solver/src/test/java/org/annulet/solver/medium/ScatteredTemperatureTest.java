@@ -36,9 +36,10 @@ class ScatteredTemperatureTest {
       double y = 0.15 + 0.7 * random.nextDouble();
       double error = Math.abs(f.temperature(x, y) - (900 + 700 * x - 300 * y));
       // The ridge of the fit, 1e-10, is all that is left, save where a gap in random points leaves
-      // every neighbour warmer (or colder) than the place: there the fit is held at their range.
+      // every neighbour warmer (or colder) than the place: there the fit is held at their range;
+      // half a spacing of 1/√500 times the slope of 762 K/m is 17 K.
       exact += error < 1e-4 ? 1 : 0;
-      assertThat(error).as("seed %d at (%s, %s)", seed, x, y).isLessThan(5);
+      assertThat(error).as("seed %d at (%s, %s)", seed, x, y).isLessThan(17);
     }
     assertThat(exact).as("seed %d", seed).isGreaterThanOrEqualTo(197);
   }
