@@ -2,11 +2,14 @@ package org.annulet.cases.cli;
 
 import java.io.IOException;
 import java.nio.file.Path;
+import java.util.LinkedHashMap;
+import java.util.Map;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.study.ModesFiles;
 import org.annulet.cases.study.ModesStudy;
-import org.annulet.post.table.Summary;
+import org.annulet.post.meaning.Results;
 import org.annulet.post.table.TextTables;
+import org.annulet.post.table.VariantTable;
 import picocli.CommandLine.Command;
 
 /** {@code annulet modes CASE}. */
@@ -16,12 +19,31 @@ import picocli.CommandLine.Command;
 final class ModesVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
+    if (caseFile.variants().isEmpty()) {
+      return one(caseFile, folder).results().complete()
+          ? ExitStatus.DONE
+          : ExitStatus.NOT_CERTIFIED;
+    }
+    Map<String, Results> byVariant = new LinkedHashMap<>();
+    for (CaseFile.Variant variant : caseFile.variants()) {
+      console()
+          .result(
+              "── " + variant.name() + (variant.about().isEmpty() ? "" : ": " + variant.about()));
+      byVariant.put(
+          variant.name(), one(variant.caseFile(), folder.resolve(variant.name())).results());
+      console().result("");
+    }
+    console().result(VariantTable.terminal(byVariant));
+    return byVariant.values().stream().allMatch(Results::complete)
+        ? ExitStatus.DONE
+        : ExitStatus.NOT_CERTIFIED;
+  }
+
+  private ModesStudy.Answer one(CaseFile caseFile, Path folder) throws IOException {
     ModesStudy.Answer answer = new ModesStudy(caseFile, console().progress()).run(Version.text());
     ModesFiles.write(folder, answer);
     console().result(TextTables.terminal(answer.results()));
-    Summary.sentences(answer.results()).forEach(console()::result);
-    Summary.CAUTIONS.forEach(console()::result);
     console().result("Written to " + folder);
-    return answer.results().complete() ? ExitStatus.DONE : ExitStatus.NOT_CERTIFIED;
+    return answer;
   }
 }
