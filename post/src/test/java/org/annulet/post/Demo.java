@@ -32,14 +32,15 @@ public final class Demo {
     mesh = Meshes.ring(0.6, period, nx, ny, "plenum", "chamber <b>&\"x\"");
     chamber = Chamber.ring(mesh, new double[] {0.45, 0.35});
     List<ModeView> views = new ArrayList<>();
+    double[][] rates = {{150, 40}, {250, 9}, {252, -22}, {350, -53}, {350, -53}, {460, -115}};
     for (int i = 0; i < 6; i++) {
       int order = (i + 1) / 2;
-      int axial = i % 2;
-      double turn = i == 2 ? 0.5 * Math.PI : 0;
+      int axial = i / 5;
+      double turn = i == 2 || i == 4 ? 0.5 * Math.PI : 0;
       ModeView v =
           Meshes.mode(
               mesh,
-              new double[] {150 + 100 * order + 10.0 * (i == 2 ? 0.2 : 1) * axial, 40 - 31 * i},
+              rates[i],
               null,
               (x, y) -> Math.cos(order * y / 0.4 + turn) * Math.cos(axial * Math.PI * x / 0.6),
               (x, y) -> 0.2 * Math.cos(order * y / 0.4 + turn) * x);

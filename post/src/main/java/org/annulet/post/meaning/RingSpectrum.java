@@ -19,6 +19,7 @@ final class RingSpectrum {
   private final boolean[] closed;
   private final double[] crossRe = new double[HIGHEST_ORDER + 1];
   private final double[] crossIm = new double[HIGHEST_ORDER + 1];
+  private final double[][][] coefficient; // [zone × strip][order + HIGHEST_ORDER][re, im]
 
   RingSpectrum(Chamber chamber, ModeView view) {
     Mesh mesh = chamber.mesh();
@@ -26,6 +27,7 @@ final class RingSpectrum {
     energy = new double[zones][2 * HIGHEST_ORDER + 1];
     closed = closed(chamber);
     double[][] range = Samples.alongRange(chamber);
+    coefficient = new double[zones * STRIPS][2 * HIGHEST_ORDER + 1][2];
     double[][][] sum = new double[zones * STRIPS][2][ANGLES];
     double[] area = new double[zones * STRIPS];
     Samples.forEach(
@@ -47,12 +49,13 @@ final class RingSpectrum {
     }
     for (int q = 0; q < sum.length; q++) {
       if (area[q] > 0) {
-        addStrip(q / STRIPS, sum[q], area[q], new double[][] {cos, sin});
+        addStrip(q, sum[q], area[q], new double[][] {cos, sin});
       }
     }
   }
 
-  private void addStrip(int zone, double[][] p, double area, double[][] turn) {
+  private void addStrip(int strip, double[][] p, double area, double[][] turn) {
+    int zone = strip / STRIPS;
     for (int m = 0; m <= HIGHEST_ORDER; m++) {
       double cr = 0;
       double ci = 0;
@@ -71,6 +74,8 @@ final class RingSpectrum {
       double plusIm = ci - sr;
       double minusRe = cr - si;
       double minusIm = ci + sr;
+      coefficient[strip][HIGHEST_ORDER + m] = new double[] {plusRe, plusIm};
+      coefficient[strip][HIGHEST_ORDER - m] = new double[] {minusRe, minusIm};
       energy[zone][HIGHEST_ORDER + m] += (plusRe * plusRe + plusIm * plusIm) / area;
       if (m > 0) {
         energy[zone][HIGHEST_ORDER - m] += (minusRe * minusRe + minusIm * minusIm) / area;
@@ -79,6 +84,27 @@ final class RingSpectrum {
       crossRe[m] += (minusRe * plusRe + minusIm * plusIm) / area;
       crossIm[m] += (minusIm * plusRe - minusRe * plusIm) / area;
     }
+  }
+
+  /** Integral of p̂ e^{−imθ} over one strip, {re, im}; m may be negative. */
+  double[] coefficient(int strip, int m) {
+    return coefficient[strip][HIGHEST_ORDER + m];
+  }
+
+  /** Strip with the largest content of order |m|. */
+  int strongestStrip(int m) {
+    int best = 0;
+    double most = -1;
+    for (int q = 0; q < coefficient.length; q++) {
+      double[] a = coefficient(q, m);
+      double[] b = coefficient(q, -m);
+      double e = a[0] * a[0] + a[1] * a[1] + b[0] * b[0] + b[1] * b[1];
+      if (e > most) {
+        most = e;
+        best = q;
+      }
+    }
+    return best;
   }
 
   /** Order |m| that carries most, the lowest of equals. */

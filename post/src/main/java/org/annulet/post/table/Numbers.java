@@ -32,6 +32,9 @@ public final class Numbers {
   /** A rate with its sign, one decimal, two below ten and three figures below one. */
   public static String signed(double value) {
     double size = Math.abs(value);
+    if (size < 5e-5) {
+      return "0";
+    }
     int decimals = size >= 10 ? 1 : size >= 1 ? 2 : size >= 0.01 ? 3 : 4;
     String text = fixed(value, decimals);
     return value > 0 && !text.matches("0\\.?0*") ? "+" + text : text;

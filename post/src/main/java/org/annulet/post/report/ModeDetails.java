@@ -1,0 +1,138 @@
+package org.annulet.post.report;
+
+import static org.annulet.post.chart.Svg.escape;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Locale;
+import org.annulet.post.meaning.GeometryKind;
+import org.annulet.post.meaning.GrowthBudget;
+import org.annulet.post.meaning.ModeEntry;
+import org.annulet.post.meaning.ModeLabel;
+import org.annulet.post.meaning.TermSensitivity;
+import org.annulet.post.table.Numbers;
+
+/** What stands beside the moving field of a mode: facts, growth budget, sensitivities. */
+final class ModeDetails {
+  private static final int ITEMS = 10;
+
+  private ModeDetails() {}
+
+  static void append(StringBuilder b, ReportInput input, int i) {
+    ModeEntry e = input.results().modes().get(i);
+    facts(b, input, e);
+    e.budget().ifPresent(budget -> budget(b, budget));
+    if (!input.sensitivities().isEmpty() && !input.sensitivities().get(i).isEmpty()) {
+      sensitivities(b, input.sensitivities().get(i));
+    }
+  }
+
+  private static void facts(StringBuilder b, ReportInput input, ModeEntry e) {
+    ModeLabel label = e.label();
+    b.append("<dl>");
+    fact(b, "found in", e.view().operatorName());
+    fact(
+        b,
+        "energy",
+        String.format(Locale.ROOT, "%.0f %% in %s", 100 * label.zoneShare(), label.zone()));
+    fact(b, "nodes there", label.axialNodes() + " axial, " + label.radialNodes() + " radial");
+    if (!label.pattern().isEmpty()) {
+      fact(b, "on the ring", label.pattern());
+    }
+    if (label.pairing() != ModeLabel.Pairing.SINGLE) {
+      fact(
+          b,
+          "pair",
+          label.pairing() == ModeLabel.Pairing.EXACT
+              ? "one eigenvalue, orientation open"
+              : "split, with mode " + (label.partner() + 1));
+    }
+    if (input.chamber().kind() == GeometryKind.SECTION
+        && label.azimuthalOrder() != null
+        && label.azimuthalOrder() > 0) {
+      fact(b, "round the axis", "the picture is one cut; the field turns with e^{imθ}");
+    }
+    fact(b, "verdict", e.view().mode().verdict().name().toLowerCase(Locale.ROOT).replace('_', ' '));
+    b.append("</dl>\n");
+  }
+
+  private static void fact(StringBuilder b, String name, String value) {
+    b.append("<dt>").append(name).append("</dt><dd>").append(escape(value)).append("</dd>");
+  }
+
+  private static void budget(StringBuilder b, GrowthBudget budget) {
+    List<GrowthBudget.Item> items = new ArrayList<>(budget.items());
+    if (items.size() > ITEMS + 1) {
+      List<GrowthBudget.Item> rest = items.subList(ITEMS, items.size());
+      GrowthBudget.Item sum =
+          new GrowthBudget.Item(
+              rest.size() + " smaller items",
+              rest.stream().mapToDouble(GrowthBudget.Item::growthShare).sum(),
+              rest.stream().mapToDouble(GrowthBudget.Item::frequencyShift).sum());
+      items = new ArrayList<>(items.subList(0, ITEMS));
+      items.add(sum);
+    }
+    double largest =
+        Math.max(
+            Math.abs(budget.growthRate()),
+            items.stream().mapToDouble(x -> Math.abs(x.growthShare())).max().orElse(0));
+    b.append("<div class=\"bars\"><h4>What drives, what damps [1/s]</h4>\n");
+    for (GrowthBudget.Item item : items) {
+      bar(
+          b,
+          new String[] {
+            "bar",
+            item.name(),
+            Numbers.signed(item.growthShare())
+                + " (first order "
+                + Numbers.signed(item.frequencyShift())
+                + " Hz)"
+          },
+          largest > 0 ? item.growthShare() / largest : 0);
+    }
+    bar(
+        b,
+        new String[] {"bar sum", "growth rate", Numbers.signed(budget.growthRate())},
+        largest > 0 ? budget.growthRate() / largest : 0);
+    double remainder = Math.abs(budget.remainder());
+    if (remainder > 1e-6 * Math.max(largest, 1e-3)) {
+      b.append("<p class=\"sign\">The shares leave ")
+          .append(escape(String.format(Locale.ROOT, "%.2g", budget.remainder())))
+          .append(" 1/s unexplained: the mode is not converged that far.</p>");
+    }
+    b.append("</div>\n");
+  }
+
+  private static void bar(StringBuilder b, String[] texts, double fraction) {
+    b.append("<div class=\"")
+        .append(texts[0])
+        .append("\"><span>")
+        .append(escape(texts[1]))
+        .append("</span><span>")
+        .append(escape(texts[2].replace('-', '−')))
+        .append("</span><span class=\"track\"><i class=\"")
+        .append(fraction >= 0 ? "drives" : "damps")
+        .append("\" style=\"width:")
+        .append(String.format(Locale.ROOT, "%.2f", 50 * Math.min(1, Math.abs(fraction))))
+        .append("%\"></i></span></div>\n");
+  }
+
+  private static void sensitivities(StringBuilder b, List<TermSensitivity> all) {
+    List<TermSensitivity> sorted = new ArrayList<>(all);
+    sorted.sort(Comparator.comparingDouble((TermSensitivity s) -> -Math.abs(s.growthPerPercent())));
+    b.append("<div class=\"scroll\" tabindex=\"0\"><table><thead><tr><th>one percent more of</th>")
+        .append("<th class=\"num\">growth rate [1/s]</th><th class=\"num\">frequency [Hz]</th>")
+        .append("</tr></thead><tbody>");
+    for (TermSensitivity s : sorted.subList(0, Math.min(ITEMS, sorted.size()))) {
+      b.append("<tr><td>")
+          .append(escape(s.name()))
+          .append("</td><td class=\"num\">")
+          .append(Numbers.signed(s.growthPerPercent()).replace('-', '−'))
+          .append("</td><td class=\"num\">")
+          .append(Numbers.signed(s.frequencyPerPercent()).replace('-', '−'))
+          .append("</td></tr>");
+    }
+    b.append("</tbody></table></div>\n");
+  }
+}
