@@ -3,6 +3,7 @@ package org.annulet.solver.eigen;
 import no.uib.cipr.matrix.DenseMatrix;
 import no.uib.cipr.matrix.NotConvergedException;
 import no.uib.cipr.matrix.SymmDenseEVD;
+import org.annulet.solver.dense.PureJavaNetlib;
 import org.annulet.solver.operator.AcousticOperator;
 import org.annulet.solver.sparse.SymmetricPattern;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
@@ -11,13 +12,17 @@ import org.apache.commons.math3.linear.RealMatrix;
 
 /** K p = λ M p of a small problem by dense algebra: M = C Cᵀ, then C⁻¹ K C⁻ᵀ. */
 final class DensePencil {
+  static {
+    PureJavaNetlib.select();
+  }
+
   private DensePencil() {}
 
   /** All eigenpairs, vectors with pᵀMp = 1. */
   static PassiveModes.Spectrum solve(AcousticOperator op) {
     int n = op.size();
     RealMatrix k = dense(op.pattern(), op.stiffness());
-    RealMatrix c = new CholeskyDecomposition(dense(op.pattern(), op.mass())).getL();
+    RealMatrix c = new CholeskyDecomposition(dense(op.pattern(), op.mass()), 1e-8, 0).getL();
     RealMatrix half = forward(c, k);
     RealMatrix b = forward(c, half.transpose());
     try {

@@ -2,6 +2,7 @@ package org.annulet.solver.eigen;
 
 import com.github.fommil.netlib.F2jARPACK;
 import java.util.Arrays;
+import org.annulet.solver.dense.PureJavaNetlib;
 import org.annulet.solver.operator.AcousticOperator;
 import org.annulet.solver.sparse.RealFactor;
 import org.netlib.util.doubleW;
@@ -17,6 +18,10 @@ import org.netlib.util.intW;
 final class Lanczos {
   private static final Object ARPACK_IS_STATIC = new Object();
   private static final int LARGEST_RESTARTS = 300;
+
+  static {
+    PureJavaNetlib.select();
+  }
 
   private Lanczos() {}
 

