@@ -177,6 +177,11 @@ public final class Mesh {
     private int triangleCount;
     private int[] named = new int[48];
     private int namedCount;
+
+    /** Sides (3 · triangle + number), by lower node, and where each node's begin; while building. */
+    private int[] sides;
+
+    private int[] bySide;
     private final List<String> zoneNames = new ArrayList<>();
     private final List<String> edgeNames = new ArrayList<>();
     private final Map<String, Integer> zoneIndex = new HashMap<>();
@@ -249,48 +254,31 @@ public final class Mesh {
      *     is no side of any triangle or is named twice, or a boundary side has no name
      */
     public Mesh build() {
-      Map<Long, int[]> sides = new HashMap<>(4 * triangleCount);
-      for (int t = 0; t < triangleCount; t++) {
-        for (int k = 0; k < 3; k++) {
-          int a = corners[3 * t + k];
-          int b = corners[3 * t + (k + 1) % 3];
-          int[] s = sides.computeIfAbsent(key(a, b), q -> new int[] {-1, -1, 0});
-          int slot = a < b ? 0 : 1;
-          if (s[slot] != -1) {
-            throw new IllegalStateException(
-                "side " + a + "–" + b + " has two triangles on the same hand");
-          }
-          s[slot] = t;
-        }
-      }
+      sortSides();
       int[] segments = new int[5 * namedCount];
+      boolean[] taken = new boolean[sides.length];
       for (int e = 0; e < namedCount; e++) {
         int a = named[3 * e];
         int b = named[3 * e + 1];
-        int[] s = sides.get(key(a, b));
-        if (s == null) {
+        int forward = find(a, b);
+        int backward = find(b, a);
+        if (forward == -1 && backward == -1) {
           throw new IllegalStateException(
-              "segment "
-                  + a
-                  + "–"
-                  + b
-                  + " of edge '"
-                  + edgeNames.get(named[3 * e + 2])
-                  + "' is no side of any triangle");
+              "segment " + name(e, a, b) + " is no side of any triangle");
         }
-        if (s[2] != 0) {
-          throw new IllegalStateException(
-              "segment "
-                  + a
-                  + "–"
-                  + b
-                  + " of edge '"
-                  + edgeNames.get(named[3 * e + 2])
-                  + "' already has a name");
+        if (forward != -1 && taken[forward] || backward != -1 && taken[backward]) {
+          throw new IllegalStateException("segment " + name(e, a, b) + " already has a name");
         }
-        s[2] = 1;
-        int left = a < b ? s[0] : s[1];
-        int right = a < b ? s[1] : s[0];
+        int left = -1;
+        int right = -1;
+        if (forward != -1) {
+          taken[forward] = true;
+          left = sides[forward] / 3;
+        }
+        if (backward != -1) {
+          taken[backward] = true;
+          right = sides[backward] / 3;
+        }
         boolean turn = left == -1;
         segments[5 * e] = named[3 * e + 2];
         segments[5 * e + 1] = turn ? b : a;
@@ -298,23 +286,71 @@ public final class Mesh {
         segments[5 * e + 3] = turn ? right : left;
         segments[5 * e + 4] = turn ? -1 : right;
       }
-      for (Map.Entry<Long, int[]> side : sides.entrySet()) {
-        int[] s = side.getValue();
-        if ((s[0] == -1 || s[1] == -1) && s[2] == 0) {
-          int a = (int) (side.getKey() >>> 32);
+      for (int i = 0; i < sides.length; i++) {
+        int a = start(sides[i]);
+        if (!taken[i] && find(end(sides[i]), a) == -1) {
           throw new IllegalStateException(
               "a boundary side at (" + xy[2 * a] + ", " + xy[2 * a + 1] + ") m has no name");
         }
       }
+      bySide = null;
+      sides = null;
       return new Mesh(this, segments);
+    }
+
+    /** Sorts the sides of all triangles by their lower node; sees that none lies on another. */
+    private void sortSides() {
+      bySide = new int[nodeCount + 1];
+      sides = new int[3 * triangleCount];
+      for (int h = 0; h < sides.length; h++) {
+        bySide[Math.min(start(h), end(h))]++;
+      }
+      int sum = 0;
+      for (int v = 0; v <= nodeCount; v++) {
+        sum += bySide[v];
+        bySide[v] = sum;
+      }
+      for (int h = sides.length - 1; h >= 0; h--) {
+        sides[--bySide[Math.min(start(h), end(h))]] = h;
+      }
+      for (int i = 0; i < sides.length; i++) {
+        int a = start(sides[i]);
+        int b = end(sides[i]);
+        if (find(a, b) != i) {
+          throw new IllegalStateException(
+              "side " + a + "–" + b + " has two triangles on the same hand");
+        }
+      }
+    }
+
+    /** Place in {@link #sides} of the side that runs from a to b, or −1. */
+    private int find(int a, int b) {
+      int low = Math.min(a, b);
+      if (low < 0 || low >= nodeCount) {
+        return -1;
+      }
+      for (int i = bySide[low]; i < bySide[low + 1]; i++) {
+        if (start(sides[i]) == a && end(sides[i]) == b) {
+          return i;
+        }
+      }
+      return -1;
+    }
+
+    private int start(int side) {
+      return corners[side];
+    }
+
+    private int end(int side) {
+      return corners[side % 3 == 2 ? side - 2 : side + 1];
+    }
+
+    private String name(int e, int a, int b) {
+      return a + "–" + b + " of edge '" + edgeNames.get(named[3 * e + 2]) + "'";
     }
 
     private double near(double y, double ref) {
       return period == 0 ? y : y - period * Math.rint((y - ref) / period);
-    }
-
-    private static long key(int a, int b) {
-      return a < b ? ((long) a << 32) | b : ((long) b << 32) | a;
     }
 
     private static int index(String name, List<String> names, Map<String, Integer> index) {

@@ -1,7 +1,9 @@
 package org.annulet.mesher.triangulate;
 
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.Map;
+import java.util.Set;
 import org.annulet.mesher.geometry.CurvePiece;
 import org.annulet.mesher.geometry.Edge;
 import org.annulet.mesher.geometry.Outline;
@@ -19,17 +21,23 @@ public final class OutlineCurves implements EdgeCurves {
 
   private final Map<String, Edge> edges = new HashMap<>();
 
+  private final Set<String> straight = new HashSet<>();
+
   /** The curves of an outline. */
   public OutlineCurves(Outline outline) {
     for (Edge e : outline.edges()) {
       edges.put(e.name(), e);
+      if (e.pieces().stream().allMatch(CurvePiece::isStraight)) {
+        straight.add(e.name());
+      }
     }
   }
 
   /**
    * {@inheritDoc}
    *
-   * @throws IllegalArgumentException if the outline has no such edge or the ends do not lie on it
+   * @throws IllegalArgumentException if the outline has no such edge or the ends do not lie on it,
+   *     where it is curved
    */
   @Override
   public double[] midpoint(String edge, double[] start, double[] end) {
@@ -37,6 +45,9 @@ public final class OutlineCurves implements EdgeCurves {
     if (e == null) {
       throw new IllegalArgumentException(
           "no edge '" + edge + "' in the outline; give the outline the mesh was made of");
+    }
+    if (straight.contains(edge)) {
+      return STRAIGHT.midpoint(edge, start, end);
     }
     double length = Math.hypot(end[0] - start[0], end[1] - start[1]);
     CurvePiece best = null;

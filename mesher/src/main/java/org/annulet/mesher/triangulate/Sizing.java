@@ -143,10 +143,10 @@ public final class Sizing {
       return this;
     }
 
-    /** Growth of the size per unit of distance, in 0.02 … 1; 0.3 unless set. */
+    /** Growth of the size per unit of distance, in 0.001 … 1; 0.3 unless set. */
     public Builder growth(double growth) {
-      if (!(growth >= 0.02 && growth <= 1)) {
-        throw new IllegalArgumentException("growth must lie in 0.02 … 1, got " + growth);
+      if (!(growth >= 0.001 && growth <= 1)) {
+        throw new IllegalArgumentException("growth must lie in 0.001 … 1, got " + growth);
       }
       this.growth = growth;
       return this;

@@ -15,10 +15,13 @@ final class Gallery {
   /** An outline with the sizes it is meshed with. */
   record Piece(Outline outline, Sizing sizing) {}
 
-  private static final Map<String, Piece> ALL = Collections.unmodifiableMap(build());
+  /** Built on first use only. */
+  private static final class Built {
+    private static final Map<String, Piece> ALL = Collections.unmodifiableMap(build());
+  }
 
   static Map<String, Piece> all() {
-    return ALL;
+    return Built.ALL;
   }
 
   private static Map<String, Piece> build() {

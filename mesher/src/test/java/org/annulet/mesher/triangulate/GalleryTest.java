@@ -69,12 +69,12 @@ class GalleryTest {
     }
     TreeMap<String, Double> lengths = new TreeMap<>();
     TreeMap<String, Double> slivers = new TreeMap<>();
+    OutlineCurves curves = new OutlineCurves(o);
     for (int e = 0; e < m.segmentCount(); e++) {
       String edge = m.edgeNames().get(m.segmentEdge(e));
       lengths.merge(edge, m.segmentLength(e), Double::sum);
       double[] mid =
-          new OutlineCurves(o)
-              .midpoint(
+          curves.midpoint(
                   edge,
                   new double[] {m.x(m.segmentStart(e)), m.y(m.segmentStart(e))},
                   new double[] {m.x(m.segmentEnd(e)), m.y(m.segmentEnd(e))});
