@@ -178,7 +178,9 @@ public final class Mesh {
     private int[] named = new int[48];
     private int namedCount;
 
-    /** Sides (3 · triangle + number), by lower node, and where each node's begin; while building. */
+    /**
+     * Sides (3 · triangle + number), by lower node, and where each node's begin; while building.
+     */
     private int[] sides;
 
     private int[] bySide;

@@ -75,9 +75,9 @@ class GalleryTest {
       lengths.merge(edge, m.segmentLength(e), Double::sum);
       double[] mid =
           curves.midpoint(
-                  edge,
-                  new double[] {m.x(m.segmentStart(e)), m.y(m.segmentStart(e))},
-                  new double[] {m.x(m.segmentEnd(e)), m.y(m.segmentEnd(e))});
+              edge,
+              new double[] {m.x(m.segmentStart(e)), m.y(m.segmentStart(e))},
+              new double[] {m.x(m.segmentEnd(e)), m.y(m.segmentEnd(e))});
       double rise =
           Math.hypot(
               mid[0] - 0.5 * (m.x(m.segmentStart(e)) + m.x(m.segmentEnd(e))),

@@ -28,6 +28,10 @@ public final class MeshingBenchmark {
       least = Math.min(least, GalleryTest.leastAngle(m, t));
     }
     System.out.printf(
-        Locale.ROOT, "%d nodes, %d triangles, least angle %.2f°%n", m.nodeCount(), m.triangleCount(), least);
+        Locale.ROOT,
+        "%d nodes, %d triangles, least angle %.2f°%n",
+        m.nodeCount(),
+        m.triangleCount(),
+        least);
   }
 }
