@@ -167,7 +167,7 @@ public record ChamberPicture(
       }
       for (int e = 0; e < n; e++) {
         if (!of.get(e).isEmpty()) {
-          double[] p = segment(mesh, of.get(e).get(of.get(e).size() / 2));
+          double[] p = segment(mesh, of.get(e).get(of.get(e).size() / 3));
           b.append(
               String.format(
                   Locale.ROOT,

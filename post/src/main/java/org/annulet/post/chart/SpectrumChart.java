@@ -101,8 +101,11 @@ public final class SpectrumChart {
       bottom = Math.min(bottom, g - bar);
       top = Math.max(top, g + bar);
     }
+    double least = 0.02 * (high - low); // rounding about zero is not blown up
+    bottom = Math.min(bottom, -least);
+    top = Math.max(top, least);
     double room = 0.15 * (top - bottom);
-    if (top - bottom > 0 && top - bottom + 2 * room < high - low) {
+    if (top - bottom + 2 * room < high - low) {
       low = Math.max(low, bottom - room);
       high = Math.min(high, top + room);
     }

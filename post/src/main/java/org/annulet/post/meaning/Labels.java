@@ -14,7 +14,7 @@ import org.annulet.post.meaning.ModeLabel.Pairing;
  *   <li>azimuthal order: given on a section; on a ring and a cross-section the order with the
  *       largest projection ({@code RingSpectrum});
  *   <li>zone: the one with the largest share of potential plus kinetic energy;
- *   <li>bulk: order 0 and, in that zone, |∫p̂|² ≥ 0.95 · V ∫|p̂|² (a quarter wave has 0.81);
+ *   <li>bulk: order 0 and, in that zone, |∫p̂|² ≥ 0.98 · V ∫|p̂|² (a quarter wave has 0.81);
  *   <li>axial and radial nodes: sign changes of the best separable shape in that zone ({@code
  *       NodeCount});
  *   <li>pair: exact when the mode's multiplicity is above one, or on a section for m ≥ 1, where the
@@ -23,7 +23,7 @@ import org.annulet.post.meaning.ModeLabel.Pairing;
  * </ul>
  */
 public final class Labels {
-  private static final double BULK = 0.95;
+  private static final double BULK = 0.98;
   private static final double SPLIT = 0.03;
 
   private Labels() {}

@@ -10,10 +10,20 @@ import java.util.Optional;
  * @param budget growth budget, where it was made
  */
 public record ModeEntry(ModeView view, ModeLabel label, Optional<GrowthBudget> budget) {
-  /** How the growth rate stands against zero and its error bar. */
+  /** Rounding of a growth rate per |s|: sums over the mesh in double precision keep about this. */
+  private static final double ROUNDING = 1e-9;
+
+  /**
+   * How the growth rate stands against zero: undecided within its error bar, and in any case within
+   * what the backward error (of the order of |δs/s|) and rounding leave open, so that an undamped
+   * passive mode never counts as growing.
+   */
   public Stability stability() {
     double growth = view.mode().growthRate();
     double bar = Double.isNaN(view.growthError()) ? 0 : view.growthError();
+    double algebra =
+        Math.sqrt(view.squaredRate()) * Math.max(ROUNDING, view.mode().backwardError());
+    bar = Math.max(bar, algebra);
     return Math.abs(growth) <= bar
         ? Stability.UNDECIDED
         : growth > 0 ? Stability.GROWS : Stability.DECAYS;

@@ -241,7 +241,7 @@ public final class HtmlReport {
           .append("\">Mode ")
           .append(i + 1)
           .append("</a></td>");
-      cell("state " + state, state.equals("undecided") ? "open" : state);
+      cell("state " + state, state);
       cell(
           "num\" data-name=\"order m",
           e.label().azimuthalOrder() == null ? "–" : e.label().azimuthalOrder().toString());
@@ -274,10 +274,14 @@ public final class HtmlReport {
     String state = e.stability().name().toLowerCase(Locale.ROOT);
     b.append("<article class=\"mode\" id=\"mode-").append(n).append("\"><div class=\"title\"><h3>");
     b.append("Mode ").append(n).append(": ");
-    b.append(escape(Numbers.withError(e.view().mode().frequency(), e.view().frequencyError())));
-    b.append(" Hz, <span class=\"").append(state).append("\">");
-    b.append(escape(growth(e)));
-    b.append(" 1/s</span></h3><p>").append(escape(e.label().text())).append("</p></div>\n");
+    b.append(
+        escape(Numbers.withError(e.view().mode().frequency(), e.view().frequencyError(), "Hz")));
+    b.append(", <span class=\"").append(state).append("\">");
+    b.append(
+        escape(
+            Numbers.withError(e.view().mode().growthRate(), e.view().growthError(), "1/s")
+                .replace('-', '−')));
+    b.append("</span></h3><p>").append(escape(e.label().text())).append("</p></div>\n");
     b.append("<div class=\"field\"><canvas width=\"600\" height=\"200\" role=\"img\" aria-label=\"")
         .append("Pressure of mode ")
         .append(n)

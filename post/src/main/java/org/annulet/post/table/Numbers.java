@@ -15,6 +15,13 @@ public final class Numbers {
     return fixed(value, digits) + " ± " + fixed(error, digits);
   }
 
+  /** The same in a sentence, with its unit. */
+  public static String withError(double value, double error, String unit) {
+    return Double.isNaN(error)
+        ? fixed(value, 2) + " " + unit + " (error not estimated)"
+        : withError(value, error) + " " + unit;
+  }
+
   /** Decimals that show an error bar to two figures, between 0 and 6. */
   private static int digits(double error) {
     if (!(error > 0)) {

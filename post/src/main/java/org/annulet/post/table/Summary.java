@@ -34,7 +34,7 @@ public final class Summary {
             + (results.complete() ? "certified complete" : "NOT certified complete")
             + "; "
             + (grow.isEmpty() ? "none grows" : count(grow.size(), "mode") + " grow" + s(grow))
-            + (open > 0 ? ", " + open + " with zero inside the error bar" : "")
+            + (open > 0 ? ", " + open + " undecided (zero lies inside the error)" : "")
             + ".");
     Optional<ModeEntry> worst =
         results.modes().stream().max(Comparator.comparingDouble(e -> e.view().mode().growthRate()));
@@ -51,12 +51,11 @@ public final class Summary {
         "Least stable is mode "
             + number
             + ", "
-            + Numbers.withError(e.view().mode().frequency(), e.view().frequencyError())
-            + " Hz ("
+            + Numbers.withError(e.view().mode().frequency(), e.view().frequencyError(), "Hz")
+            + " ("
             + e.label().text()
             + "), growth rate "
-            + Numbers.withError(e.view().mode().growthRate(), e.view().growthError())
-            + " 1/s";
+            + Numbers.withError(e.view().mode().growthRate(), e.view().growthError(), "1/s");
     if (e.budget().isEmpty()) {
       return head + ".";
     }

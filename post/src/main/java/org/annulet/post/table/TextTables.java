@@ -89,7 +89,7 @@ public final class TextTables {
               switch (e.stability()) {
                 case GROWS -> "GROWS";
                 case DECAYS -> "decays";
-                case UNDECIDED -> "open";
+                case UNDECIDED -> "undecided";
               },
               e.label().text(),
               mode.verdict().name().toLowerCase(Locale.ROOT).replace('_', ' ')));

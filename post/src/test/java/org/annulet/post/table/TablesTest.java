@@ -11,7 +11,9 @@ import java.util.Optional;
 import org.annulet.post.Demo;
 import org.annulet.post.meaning.Certificate;
 import org.annulet.post.meaning.ModeEntry;
+import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.Results;
+import org.annulet.solver.modes.Mode;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.openqa.selenium.json.Json;
@@ -105,7 +107,7 @@ class TablesTest {
     assertThat(text)
         .contains("150.00 ± 0.40", "40 ± 12", "GROWS", "not estimated")
         .contains("9 ± 12") // zero inside the bar
-        .contains("6 modes in the window, certified complete; 1 mode grows, 1 with zero inside")
+        .contains("6 modes in the window, certified complete; 1 mode grows, 1 undecided")
         .contains("Least stable is mode 1")
         .contains("driven by flame burner 1 (+110.0 1/s)")
         .contains("damped by two-port <burners> (-60.0 1/s) and 1 more (-10.0 1/s)")
@@ -127,6 +129,16 @@ class TablesTest {
     assertThat(Numbers.withError(1, Double.NaN)).isEqualTo("1.00 ± not estimated");
     assertThat(Numbers.fixed(-0.001, 1)).isEqualTo("0.0");
     assertThat(Numbers.signed(-0.25)).isEqualTo("-0.250");
+  }
+
+  @Test
+  void undampedPassiveMode_isNotSaidToGrowForItsRounding() {
+    ModeEntry e = results.modes().get(0);
+    Mode m = e.view().mode();
+    Mode passive = new Mode(1e-8, 500, m.re(), m.im(), 1, 1e-13, 3, m.verdict());
+    ModeView view = new ModeView(passive, m.re(), m.im(), null, "ring", Double.NaN, Double.NaN);
+    assertThat(new ModeEntry(view, e.label(), Optional.empty()).stability())
+        .isEqualTo(ModeEntry.Stability.UNDECIDED);
   }
 
   @Test
