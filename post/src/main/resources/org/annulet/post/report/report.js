@@ -11,10 +11,11 @@
   const maps = new Map();
   const dark = window.matchMedia("(prefers-color-scheme: dark)");
   let palette = null;
+  let printing = false; // paper is light whatever the screen is
 
   // 256 colours from suction (blue-green) over paper to pressure (copper).
   function colours() {
-    const stops = dark.matches
+    const stops = dark.matches && !printing
       ? [[126, 214, 214], [34, 122, 134], [30, 32, 36], [178, 84, 36], [250, 186, 130]]
       : [[8, 64, 80], [60, 150, 160], [247, 244, 238], [214, 120, 66], [122, 38, 8]];
     const out = new Uint32Array(256);
@@ -138,7 +139,7 @@
       g.putImageData(this.image, 0, 0);
       const scale = this.canvas.width / data.size[0];
       g.setTransform(scale, 0, 0, scale, 0, 0);
-      g.strokeStyle = getComputedStyle(this.canvas).color;
+      g.strokeStyle = printing ? "#23252a" : getComputedStyle(this.canvas).color;
       g.lineWidth = 1.1;
       g.stroke(outline);
       g.setTransform(1, 0, 0, 1, 0, 0);
@@ -176,5 +177,10 @@
   let pending = 0;
   window.addEventListener("resize", () => { clearTimeout(pending); pending = setTimeout(redraw, 120); });
   dark.addEventListener("change", redraw);
-  window.addEventListener("beforeprint", () => viewers.forEach((v) => v.draw()));
+  window.addEventListener("beforeprint", () => {
+    printing = true;
+    palette = null;
+    viewers.forEach((v) => v.draw());
+  });
+  window.addEventListener("afterprint", () => { printing = false; redraw(); });
 })();

@@ -186,6 +186,17 @@ class ReportInBrowserTest {
   }
 
   @Test
+  void printOnA4_givesAPdfOfThePagesWithoutControls() {
+    org.openqa.selenium.Pdf pdf = browser.print(new org.openqa.selenium.print.PrintOptions());
+    byte[] bytes = java.util.Base64.getDecoder().decode(pdf.getContent());
+    assertThat(new String(bytes, 0, 5, java.nio.charset.StandardCharsets.US_ASCII))
+        .isEqualTo("%PDF-");
+    browser.executeCdpCommand("Emulation.setEmulatedMedia", java.util.Map.of("media", "print"));
+    assertThat(mode(2).findElement(By.tagName("button")).isDisplayed()).isFalse();
+    browser.executeCdpCommand("Emulation.setEmulatedMedia", java.util.Map.of("media", ""));
+  }
+
+  @Test
   void nothingIsRequestedAndNothingIsLogged() {
     mode(6);
     List<String> requests =

@@ -183,7 +183,8 @@ class VtkReadBackTest {
     // cylinder: lateral 2πRL and two discs πR² (the axis sweeps nothing)
     assertThat(area).isCloseTo(2 * Math.PI * 0.5 + 2 * Math.PI * 0.25, within(2e-4));
     Surface open = Surface.swept(mesh, 1.5 * Math.PI, 54);
-    ModeView view = Meshes.mode(mesh, new double[] {100, 0}, 2, (x, r) -> r * r);
+    ModeView view =
+        Meshes.mode(mesh, new double[] {100, 0}, 2, (x, r) -> r * r, (x, r) -> r * r / 2);
     new ModeFiles(folder, mesh, open).modes("swept", List.of(view));
     Map<String, String> got = read(folder.resolve("swept-01.vtu"));
     double[] xyz = numbers(got.get("points"));
@@ -192,9 +193,9 @@ class VtkReadBackTest {
     for (int p = 0; p < re.length; p++) {
       double y = xyz[3 * p + 1];
       double z = xyz[3 * p + 2];
-      // r² e^{2iθ} = (y + iz)²
-      assertThat(re[p]).isCloseTo(y * y - z * z, within(1e-14));
-      assertThat(im[p]).isCloseTo(2 * y * z, within(1e-14));
+      // (1 + i/2) r² e^{2iθ} = (1 + i/2)(y + iz)²
+      assertThat(re[p]).isCloseTo(y * y - z * z - y * z, within(1e-14));
+      assertThat(im[p]).isCloseTo(2 * y * z + (y * y - z * z) / 2, within(1e-14));
     }
   }
 
