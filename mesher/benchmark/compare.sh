@@ -26,7 +26,7 @@ compare() { # name graded our-size gmsh-size
   awk "BEGIN { printf \"$1: ratio %.2f\n\", $a / $b }"
 }
 compare uniform 0 0.00116 0.000793
-compare graded 1 0.000268 0.000208
+compare graded 1 0.00027 0.000203
 for h in 0.0036 0.00116 0.000366; do
   t=$(ours uniform $h); echo "growth: $t s: $(cat "$out/log")"
 done

@@ -125,7 +125,7 @@ class GalleryTest {
   }
 
   /** Points of the outline with two directions below 60° apart, taken at a 300th of the box. */
-  private static List<Point> sharpCorners(Outline o) {
+  static List<Point> sharpCorners(Outline o) {
     double[] box = o.box();
     List<Point> sharp = new ArrayList<>();
     List<List<double[]>> ways = new ArrayList<>();
