@@ -14,8 +14,14 @@ import org.junit.jupiter.api.Test;
 class OutlineMesherTest {
   private static Outline disc(double radius) {
     return Outline.builder()
-        .point("e", radius, 0).point("n", 0, radius).point("w", -radius, 0).point("s", 0, -radius)
-        .arc("upper", "e", "n", "w").arc("lower", "w", "s", "e").zone("gas", "upper", "lower").build();
+        .point("e", radius, 0)
+        .point("n", 0, radius)
+        .point("w", -radius, 0)
+        .point("s", 0, -radius)
+        .arc("upper", "e", "n", "w")
+        .arc("lower", "w", "s", "e")
+        .zone("gas", "upper", "lower")
+        .build();
   }
 
   @Test
@@ -68,8 +74,7 @@ class OutlineMesherTest {
     Outline l = Gallery.polygon(0, 0, 1, 0, 1, 0.5, 0.5, 0.5, 0.5, 1, 0, 1);
     double graded = shortestSideAt(OutlineMesher.mesh(l, Sizing.of(0.1)), 0.5, 0.5);
     double plain =
-        shortestSideAt(
-            OutlineMesher.mesh(l, Sizing.builder(0.1).cornerShare(1).build()), 0.5, 0.5);
+        shortestSideAt(OutlineMesher.mesh(l, Sizing.builder(0.1).cornerShare(1).build()), 0.5, 0.5);
     assertThat(graded).isLessThan(0.026);
     assertThat(plain).isGreaterThan(0.05);
   }
@@ -104,8 +109,7 @@ class OutlineMesherTest {
         p[2 * k + 1] = -2 + Math.sin(a);
       }
       int exact = exactInCircle(p);
-      boolean ours =
-          Predicates.inCircle(p[0], p[1], p[2], p[3], p[4], p[5], p[6], p[7]);
+      boolean ours = Predicates.inCircle(p[0], p[1], p[2], p[3], p[4], p[5], p[6], p[7]);
       if (exact != 0) {
         assertThat(ours).isEqualTo(exact > 0);
         close++;

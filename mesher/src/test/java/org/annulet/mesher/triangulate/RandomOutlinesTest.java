@@ -79,8 +79,7 @@ class RandomOutlinesTest {
     List<IConstraint> constraints = new ArrayList<>();
     for (int e = 0; e < m.segmentCount(); e++) {
       LinearConstraint c =
-          new LinearConstraint(
-              List.of(nodes.get(m.segmentStart(e)), nodes.get(m.segmentEnd(e))));
+          new LinearConstraint(List.of(nodes.get(m.segmentStart(e)), nodes.get(m.segmentEnd(e))));
       c.complete();
       constraints.add(c);
     }
