@@ -42,10 +42,7 @@ final class Refiner {
   private int segmentCount;
   private boolean[] forced = new boolean[256];
   private boolean[] dead = new boolean[256];
-  private int[] queue = new int[4096];
-  private int head;
-  private int queued;
-  private boolean[] inQueue = new boolean[4096];
+  private final TriangleQueue queue = new TriangleQueue();
   private int[] hits = new int[16];
   private double newX;
   private double newY;
@@ -81,12 +78,8 @@ final class Refiner {
     for (int t = 0; t < mesh.triangleCount; t++) {
       enqueue(t);
     }
-    while (queued > 0) {
-      int t = queue[head];
-      head = (head + 1) & (queue.length - 1);
-      queued--;
-      inQueue[t] = false;
-      treat(t);
+    while (!queue.isEmpty()) {
+      treat(queue.poll());
       drainSegments();
     }
   }
@@ -120,23 +113,9 @@ final class Refiner {
   }
 
   private void enqueue(int t) {
-    if (t >= inQueue.length) {
-      inQueue = Arrays.copyOf(inQueue, Math.max(2 * inQueue.length, t + 1));
+    if (mesh.zone[t] >= 0) {
+      queue.add(t);
     }
-    if (inQueue[t] || mesh.zone[t] < 0) {
-      return;
-    }
-    if (queued == queue.length) {
-      int[] longer = new int[2 * queued];
-      for (int i = 0; i < queued; i++) {
-        longer[i] = queue[(head + i) & (queued - 1)];
-      }
-      queue = longer;
-      head = 0;
-    }
-    queue[(head + queued) & (queue.length - 1)] = t;
-    queued++;
-    inQueue[t] = true;
   }
 
   // Segments
