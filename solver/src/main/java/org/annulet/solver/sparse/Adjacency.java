@@ -4,7 +4,7 @@ package org.annulet.solver.sparse;
  * The graph of a symmetric pattern: for every unknown its neighbours, without itself.
  *
  * @param start first neighbour of each unknown, shape [n + 1]
- * @param neighbour ascending for each unknown
+ * @param neighbour of each unknown, not sorted
  */
 record Adjacency(int[] start, int[] neighbour) {
   static Adjacency of(SymmetricPattern pattern) {
@@ -30,6 +30,54 @@ record Adjacency(int[] start, int[] neighbour) {
       }
     }
     return new Adjacency(start, neighbour);
+  }
+
+  /** The unknowns in breadth-first order: neighbours come to lie near each other in memory. */
+  int[] breadthFirst() {
+    int n = size();
+    int[] walk = new int[n];
+    boolean[] seen = new boolean[n];
+    int end = 0;
+    int seed = 0;
+    for (int q = 0; q < n; q++) {
+      if (q == end) {
+        while (seen[seed]) {
+          seed++;
+        }
+        seen[seed] = true;
+        walk[end++] = seed;
+      }
+      int v = walk[q];
+      for (int p = start[v]; p < start[v + 1]; p++) {
+        int w = neighbour[p];
+        if (!seen[w]) {
+          seen[w] = true;
+          walk[end++] = w;
+        }
+      }
+    }
+    return walk;
+  }
+
+  /**
+   * The same graph in other numbers.
+   *
+   * @param order the unknown that becomes number k, shape [n]
+   */
+  Adjacency renumbered(int[] order) {
+    int n = size();
+    int[] place = EliminationTree.inverse(order);
+    int[] begin = new int[n + 1];
+    int[] other = new int[neighbour.length];
+    int m = 0;
+    for (int k = 0; k < n; k++) {
+      int v = order[k];
+      for (int p = start[v]; p < start[v + 1]; p++) {
+        other[m++] = place[neighbour[p]];
+      }
+      begin[k + 1] = m;
+    }
+    return new Adjacency(begin, other);
   }
 
   int size() {

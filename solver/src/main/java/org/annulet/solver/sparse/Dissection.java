@@ -17,7 +17,7 @@ import java.util.Arrays;
  */
 final class Dissection {
   /** Parts up to this size are ordered by minimum degree. */
-  private static final int LEAF = 120;
+  private static final int LEAF = 80;
 
   /** The smaller side keeps at least this share. */
   private static final double EDGE = 0.3;

@@ -51,8 +51,8 @@ final class FrontTree {
 
   final long factorEntries;
 
-  FrontTree(SymmetricPattern pattern, Adjacency graph, int[] ordering) {
-    FrontPartition partition = FrontPartition.of(EliminationTree.of(graph, ordering));
+  FrontTree(SymmetricPattern pattern, EliminationTree eliminationTree) {
+    FrontPartition partition = FrontPartition.of(eliminationTree);
     order = partition.order();
     firstColumn = partition.firstColumn();
     fronts = partition.parent().length;

@@ -17,8 +17,27 @@ public final class MultifrontalAnalysis implements SymmetricAnalysis {
    */
   MultifrontalAnalysis(SymmetricPattern pattern, double[][] coordinates) {
     this.pattern = pattern;
+    tree = new FrontTree(pattern, order(pattern, coordinates));
+  }
+
+  /** Ordering and elimination tree, found in a numbering that keeps neighbours close in memory. */
+  static EliminationTree order(SymmetricPattern pattern, double[][] coordinates) {
     Adjacency graph = Adjacency.of(pattern);
-    tree = new FrontTree(pattern, graph, Dissection.order(graph, coordinates));
+    int[] walk = graph.breadthFirst();
+    Adjacency near = graph.renumbered(walk);
+    double[][] at = coordinates == null ? null : new double[2][walk.length];
+    if (coordinates != null) {
+      for (int k = 0; k < walk.length; k++) {
+        at[0][k] = coordinates[0][walk[k]];
+        at[1][k] = coordinates[1][walk[k]];
+      }
+    }
+    EliminationTree tree = EliminationTree.of(near, Dissection.order(near, at));
+    int[] order = tree.order();
+    for (int k = 0; k < order.length; k++) {
+      order[k] = walk[order[k]];
+    }
+    return tree;
   }
 
   @Override
