@@ -74,7 +74,10 @@ public final class BlochAssembly {
     }
     Setup.Matrices matrices = setup.matrices(assembler(symmetric, size, even, odd));
     return new AssembledProblem(
-        setup.operator(matrices, 0), cells.whole(), ring, (re, im) -> expand(q, even, odd, re, im));
+        setup.operator(matrices, 0, 0),
+        cells.whole(),
+        ring,
+        (re, im) -> expand(q, even, odd, re, im));
   }
 
   private synchronized Assembler assembler(

@@ -11,6 +11,7 @@ import org.annulet.solver.flame.Flame;
 import org.annulet.solver.flame.Patch;
 import org.annulet.solver.flame.Place;
 import org.annulet.solver.flame.Reference;
+import org.annulet.solver.flame.Side;
 import org.annulet.solver.medium.Medium;
 import org.annulet.solver.operator.Analytic;
 import org.annulet.solver.operator.AnalyticFunction;
@@ -21,17 +22,21 @@ import org.annulet.solver.operator.SparseVector;
 final class FlameTerms {
   private final Assembler assembler;
   private final List<WallPart> walls;
+  private final Map<String, Side> cuts;
   private final double crossFactor;
   private final Sectors sectors;
   private final Functionals functionals;
 
   /**
    * @param walls of the whole problem
+   * @param cuts upstream side of each inner edge across which the pressure jumps
    * @param crossFactor m² or k²
    */
-  FlameTerms(Assembler assembler, List<WallPart> walls, double crossFactor) {
+  FlameTerms(
+      Assembler assembler, List<WallPart> walls, Map<String, Side> cuts, double crossFactor) {
     this.assembler = assembler;
     this.walls = walls;
+    this.cuts = cuts;
     this.crossFactor = crossFactor;
     this.sectors = Sectors.of(assembler.mesh(), assembler.metric().geometry());
     this.functionals = new Functionals(assembler, sectors);
@@ -94,7 +99,13 @@ final class FlameTerms {
   }
 
   private EdgeSegments ofBurner(String edge, int burner) {
-    EdgeSegments all = EdgeSegments.passage(assembler.nodes(), assembler.metric(), edge);
+    CutMesh nodes = assembler.nodes();
+    Metric metric = assembler.metric();
+    Side upstream = cuts.get(edge); // behind a two-port the heat goes to the gas downstream of it
+    EdgeSegments all =
+        upstream == null
+            ? EdgeSegments.passage(nodes, metric, edge)
+            : EdgeSegments.of(nodes, metric, edge, upstream).opposite(nodes, metric);
     return ofBurner(all, burner);
   }
 
@@ -153,6 +164,14 @@ final class FlameTerms {
               + "' as reference");
     }
     checkStaging(flame);
+    if (cuts.containsKey(sheet.edge())) {
+      throw new IllegalArgumentException(
+          "flame '"
+              + flame.name()
+              + "': a two-port on edge '"
+              + sheet.edge()
+              + "' knows the mean velocity only, so the sheet cannot answer pointwise");
+    }
     EdgeSegments side = side(edge);
     FluxRows flux = new FluxRows(assembler, side, walls, crossFactor);
     double factor = flame.firing().heatRelease() / (side.area() * edge.meanVelocity());

@@ -32,34 +32,46 @@ final class PatchQuadrature {
 
   /** Visits all points of the part that belongs to a burner; burner 1 where there is one only. */
   void visit(Patch patch, int burner, Point point) {
-    int zone = Names.zone(mesh, patch.zone(), "patch");
     boolean narrow = !Double.isInfinite(patch.width());
     if (narrow && !(metric.geometry() instanceof Ring)) {
       throw new IllegalArgumentException(
           "patch in zone '" + patch.zone() + "' has a width, which only a ring knows");
     }
+    double centre = sectors.centre(burner);
+    double all = sectors.count() > 1 ? sectors.pitch() / 2 : Double.POSITIVE_INFINITY;
+    double half = all;
+    if (narrow) {
+      Ring ring = (Ring) metric.geometry();
+      double scale = ring.zones().get(patch.zone()).meanRadius() / ring.unrolledRadius();
+      half = Math.min(all, patch.width() / 2 / scale);
+    }
+    visit(patch.zone(), new double[] {patch.fromX(), patch.toX(), centre, half}, point);
+  }
+
+  /**
+   * Visits all points of a box in a zone.
+   *
+   * @param box lower and upper x, middle and half height in y, in m
+   */
+  void visit(String zoneName, double[] box, Point point) {
+    int zone = Names.zone(mesh, zoneName, "patch");
     double[][] polygon = new double[2][16];
     for (int t = 0; t < mesh.triangleCount(); t++) {
       if (mesh.zone(t) != zone) {
         continue;
       }
-      double half = patch.width() / 2 / metric.arcScale(t);
-      if (sectors.count() > 1) {
-        half = Math.min(half, sectors.pitch() / 2);
-      }
-      double centre = sectors.centre(burner);
       double middle = (mesh.cornerY(t, 0) + mesh.cornerY(t, 1) + mesh.cornerY(t, 2)) / 3;
       double shift =
-          mesh.period() == 0 ? 0 : mesh.period() * Math.rint((middle - centre) / mesh.period());
+          mesh.period() == 0 ? 0 : mesh.period() * Math.rint((middle - box[2]) / mesh.period());
       for (int k = 0; k < 3; k++) {
         polygon[0][k] = mesh.cornerX(t, k);
         polygon[1][k] = mesh.cornerY(t, k) - shift;
       }
-      int n = clip(polygon, 3, 0, 1, patch.fromX());
-      n = clip(polygon, n, 0, -1, -patch.toX());
-      if (narrow || sectors.count() > 1) {
-        n = clip(polygon, n, 1, 1, centre - half);
-        n = clip(polygon, n, 1, -1, -centre - half);
+      int n = clip(polygon, 3, 0, 1, box[0]);
+      n = clip(polygon, n, 0, -1, -box[1]);
+      if (!Double.isInfinite(box[3])) {
+        n = clip(polygon, n, 1, 1, box[2] - box[3]);
+        n = clip(polygon, n, 1, -1, -box[2] - box[3]);
       }
       for (int k = 2; k < n; k++) {
         piece(t, shift, polygon, k, point);

@@ -6,10 +6,13 @@ import java.util.List;
 import java.util.Map;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.mesher.mesh.RingCells;
+import org.annulet.solver.boundary.Damper;
 import org.annulet.solver.boundary.OpenEnd;
 import org.annulet.solver.boundary.Rigid;
+import org.annulet.solver.boundary.TwoPort;
 import org.annulet.solver.boundary.Wall;
 import org.annulet.solver.flame.Flame;
+import org.annulet.solver.flame.Side;
 import org.annulet.solver.medium.Medium;
 
 /**
@@ -29,6 +32,8 @@ public final class ProblemBuilder {
   private final Map<String, Wall> walls = new LinkedHashMap<>();
   private final Map<Setup.FaceOf, Wall> faces = new LinkedHashMap<>();
   private final List<Flame> flames = new ArrayList<>();
+  private final List<PortTerms.PlacedDamper> dampers = new ArrayList<>();
+  private final List<PortTerms.PlacedTwoPort> twoPorts = new ArrayList<>();
 
   /**
    * Begins with all walls rigid and no flame.
@@ -89,13 +94,48 @@ public final class ProblemBuilder {
     return this;
   }
 
+  /** Adds a damper at a place. */
+  public ProblemBuilder damper(String name, Damper damper, DamperPlace place) {
+    dampers.add(new PortTerms.PlacedDamper(name, damper, place));
+    return this;
+  }
+
+  /**
+   * Puts a two-port across an inner edge, where the pressure may then jump; on a ring one at each
+   * burner.
+   *
+   * @param edge name of the inner edge
+   * @param upstream side 1 of the port
+   */
+  public ProblemBuilder twoPort(String edge, Side upstream, TwoPort port) {
+    Names.edge(metric.mesh(), edge);
+    twoPorts.add(new PortTerms.PlacedTwoPort(edge, upstream, edge, port));
+    return this;
+  }
+
+  /**
+   * Joins two boundary edges by a two-port; on a ring burner by burner.
+   *
+   * @param first name of the edge on side 1, the upstream one
+   * @param second name of the edge on side 2
+   */
+  public ProblemBuilder twoPort(String first, String second, TwoPort port) {
+    Names.edge(metric.mesh(), first);
+    Names.edge(metric.mesh(), second);
+    twoPorts.add(new PortTerms.PlacedTwoPort(first, null, second, port));
+    return this;
+  }
+
   private Setup setup() {
     return new Setup(
         metric,
         medium,
-        new LinkedHashMap<>(walls),
-        new LinkedHashMap<>(faces),
-        List.copyOf(flames));
+        new Setup.Parts(
+            new LinkedHashMap<>(walls),
+            new LinkedHashMap<>(faces),
+            List.copyOf(flames),
+            List.copyOf(dampers),
+            List.copyOf(twoPorts)));
   }
 
   /**
@@ -106,11 +146,11 @@ public final class ProblemBuilder {
    */
   public AssembledProblem build() {
     Setup setup = setup();
-    boolean offAxis = metric.geometry() instanceof Section section && section.order() > 0;
-    Assembler assembler = setup.assembler(offAxis ? Setup.Axis.NO_PRESSURE : Setup.Axis.FREE);
+    int order = metric.geometry() instanceof Section section ? section.order() : 0;
+    Assembler assembler = setup.assembler(order > 0 ? Setup.Axis.NO_PRESSURE : Setup.Axis.FREE);
     UnknownMap map = assembler.even();
     return new AssembledProblem(
-        setup.operator(setup.matrices(assembler), metric.crossFactor()),
+        setup.operator(setup.matrices(assembler), order, metric.crossFactor()),
         metric.mesh(),
         metric.geometry(),
         (re, im) -> setup.expand(map, re, im));

@@ -51,7 +51,7 @@ public final class SectionAssembly {
     }
     UnknownMap map = shared.assembler().even();
     return new AssembledProblem(
-        setup.operator(shared, (double) m * m),
+        setup.operator(shared, m, (double) m * m),
         setup.mesh(),
         here,
         (re, im) -> setup.expand(map, re, im));

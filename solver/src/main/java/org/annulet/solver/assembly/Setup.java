@@ -4,11 +4,14 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.TreeMap;
+import java.util.TreeSet;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.solver.boundary.OpenEnd;
 import org.annulet.solver.boundary.ReactingWall;
 import org.annulet.solver.boundary.Wall;
 import org.annulet.solver.flame.Flame;
+import org.annulet.solver.flame.Side;
 import org.annulet.solver.medium.Medium;
 import org.annulet.solver.operator.AcousticOperator;
 import org.annulet.solver.operator.Analytic;
@@ -24,23 +27,36 @@ final class Setup {
   private final Map<String, Wall> walls;
   private final Map<FaceOf, Wall> faces;
   private final List<Flame> flames;
+  private final List<PortTerms.PlacedDamper> dampers;
+  private final List<PortTerms.PlacedTwoPort> twoPorts;
 
   /** A face of a zone. */
   record FaceOf(int zone, Face face) {}
 
-  Setup(
-      Metric metric,
-      Medium medium,
-      Map<String, Wall> walls,
-      Map<FaceOf, Wall> faces,
-      List<Flame> flames) {
+  Setup(Metric metric, Medium medium, Parts parts) {
     this.metric = metric;
     this.medium = medium;
-    this.nodes = new CutMesh(metric.mesh(), Set.of());
-    this.walls = walls;
-    this.faces = faces;
-    this.flames = flames;
+    this.walls = parts.walls();
+    this.faces = parts.faces();
+    this.flames = parts.flames();
+    this.dampers = parts.dampers();
+    this.twoPorts = parts.twoPorts();
+    Set<String> cuts = new TreeSet<>();
+    for (PortTerms.PlacedTwoPort p : twoPorts) {
+      if (p.upstream() != null) {
+        cuts.add(p.edge1());
+      }
+    }
+    this.nodes = new CutMesh(metric.mesh(), cuts);
   }
+
+  /** Everything that is put into the gas and onto its walls. */
+  record Parts(
+      Map<String, Wall> walls,
+      Map<FaceOf, Wall> faces,
+      List<Flame> flames,
+      List<PortTerms.PlacedDamper> dampers,
+      List<PortTerms.PlacedTwoPort> twoPorts) {}
 
   Mesh mesh() {
     return metric.mesh();
@@ -157,18 +173,31 @@ final class Setup {
       List<WallPart> parts,
       List<SparseTerm> walls) {}
 
-  /** The operator at one m² or k². */
-  AcousticOperator operator(Matrices m, double crossFactor) {
+  /** The operator at an azimuthal order (0 where there is none) and its m² or k². */
+  AcousticOperator operator(Matrices m, int order, double crossFactor) {
     double[] stiffness = m.stiffness().clone();
     if (crossFactor != 0) {
       for (int q = 0; q < stiffness.length; q++) {
         stiffness[q] += crossFactor * m.cross()[q];
       }
     }
-    FlameTerms terms = new FlameTerms(m.assembler(), m.parts(), crossFactor);
+    Map<String, Side> cuts = new TreeMap<>();
+    for (PortTerms.PlacedTwoPort port : twoPorts) {
+      if (port.upstream() != null) {
+        cuts.put(port.edge1(), port.upstream());
+      }
+    }
+    FlameTerms terms = new FlameTerms(m.assembler(), m.parts(), cuts, crossFactor);
     List<LowRankTerm> lowRank = new ArrayList<>();
     for (Flame flame : flames) {
       lowRank.addAll(terms.of(flame));
+    }
+    PortTerms ports = new PortTerms(m.assembler(), order);
+    for (PortTerms.PlacedTwoPort port : twoPorts) {
+      lowRank.addAll(ports.of(port));
+    }
+    for (PortTerms.PlacedDamper damper : dampers) {
+      lowRank.add(ports.of(damper));
     }
     return new AcousticOperator(
         m.assembler().pattern(),
