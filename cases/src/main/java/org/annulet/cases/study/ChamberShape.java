@@ -7,19 +7,16 @@ import java.util.Map;
 import java.util.Optional;
 import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.DrawnShape;
 import org.annulet.cases.read.Geometry;
-import org.annulet.cases.read.Problem;
 import org.annulet.mesher.geometry.GeometryFault;
-import org.annulet.mesher.geometry.Outline;
-import org.annulet.mesher.geometry.RingShape;
-import org.annulet.mesher.geometry.RingShape.RingZone;
-import org.annulet.mesher.geometry.Zone;
 import org.annulet.mesher.mesh.EdgeCurves;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.mesher.mesh.RingCells;
 import org.annulet.mesher.mesh.RingReplication;
 import org.annulet.mesher.mesh.UniformRefinement;
 import org.annulet.mesher.triangulate.MeshingLimitException;
+import org.annulet.mesher.triangulate.OutlineCurves;
 import org.annulet.mesher.triangulate.OutlineMesher;
 import org.annulet.mesher.triangulate.RingMesher;
 import org.annulet.mesher.triangulate.Sizing;
@@ -55,13 +52,7 @@ public record ChamberShape(
         ladder.add(ladder.get(i - 1).refined(curves));
       }
     } catch (GeometryFault e) {
-      List<Problem> problems = new ArrayList<>();
-      for (GeometryFault.Fault f : e.faults()) {
-        String[] text = f.toString().split("\\R\\s*mend: ", 2);
-        problems.add(
-            caseFile.source().problem("geometry", text[0], text.length > 1 ? text[1] : ""));
-      }
-      throw new CaseFaultException(problems);
+      throw new CaseFaultException(DrawnShape.problems(caseFile.source(), e));
     } catch (MeshingLimitException e) {
       throw new CaseFaultException(
           List.of(
@@ -89,12 +80,7 @@ public record ChamberShape(
 
   private static EdgeCurves curves(CaseFile caseFile) {
     org.annulet.cases.read.Outline read = outline(caseFile.geometry());
-    if (read == null) {
-      return EdgeCurves.STRAIGHT;
-    }
-    Outline outline = outline(read);
-    return (edge, start, end) ->
-        outline.edge(edge).closest(0.5 * (start[0] + end[0]), 0.5 * (start[1] + end[1]));
+    return read == null ? EdgeCurves.STRAIGHT : new OutlineCurves(DrawnShape.outline(read));
   }
 
   private static org.annulet.cases.read.Outline outline(Geometry g) {
@@ -111,7 +97,7 @@ public record ChamberShape(
     Geometry g = caseFile.geometry();
     Sizing sizing = sizing(g.meshSize(), g.zoneNames()).scaled(scale);
     if (g instanceof Geometry.Ring ring) {
-      RingCells cells = RingMesher.mesh(ringShape(ring), sizing);
+      RingCells cells = RingMesher.mesh(DrawnShape.ring(ring), sizing);
       return new ChamberShape(cells.whole(), Optional.of(cells), ringGeometry(ring));
     }
     if (g instanceof Geometry.Section section) {
@@ -146,24 +132,8 @@ public record ChamberShape(
       org.annulet.cases.read.Outline read,
       Sizing sizing,
       org.annulet.solver.assembly.Geometry geometry) {
-    return new ChamberShape(OutlineMesher.mesh(outline(read), sizing), Optional.empty(), geometry);
-  }
-
-  private static Outline outline(org.annulet.cases.read.Outline read) {
-    Outline.Builder b = Outline.builder();
-    read.points().forEach((name, p) -> b.point(name, p.x(), p.y()));
-    read.edges()
-        .forEach(
-            (name, e) -> {
-              String[] through = e.points().toArray(new String[0]);
-              switch (e.shape()) {
-                case LINE -> b.line(name, through);
-                case ARC -> b.arc(name, through[0], through[1], through[2]);
-                case CURVE -> b.curve(name, through);
-              }
-            });
-    read.zones().forEach((name, z) -> b.zone(new Zone(name, z.boundary(), z.holes())));
-    return b.build();
+    return new ChamberShape(
+        OutlineMesher.mesh(DrawnShape.outline(read), sizing), Optional.empty(), geometry);
   }
 
   private static Sizing sizing(Geometry.MeshSize size, List<String> zones) {
@@ -178,18 +148,6 @@ public record ChamberShape(
               }
             });
     return b.build();
-  }
-
-  private static RingShape ringShape(Geometry.Ring ring) {
-    List<RingZone> zones = new ArrayList<>();
-    for (Geometry.RingZone z : ring.zones()) {
-      if (z instanceof Geometry.Annulus a) {
-        zones.add(RingZone.annulus(a.name(), a.meanRadius(), a.gap(), a.length()));
-      } else if (z instanceof Geometry.Ducts d) {
-        zones.add(RingZone.ducts(d.name(), d.meanRadius(), d.bore(), d.length()));
-      }
-    }
-    return new RingShape(ring.burnerCount(), ring.unrolledRadius(), zones);
   }
 
   private static Ring ringGeometry(Geometry.Ring ring) {

@@ -3,20 +3,31 @@ package org.annulet.cases.study;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.stream.Stream;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.CaseSource;
 import org.annulet.mesher.mesh.Mesh;
+import org.annulet.post.chart.SpectrumChart;
+import org.annulet.post.files.WholeFile;
 import org.annulet.post.meaning.Chamber;
 import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeView;
+import org.annulet.post.report.Fact;
+import org.annulet.post.report.HtmlReport;
+import org.annulet.post.report.ReportInput;
 import org.annulet.post.table.ModesCsv;
 import org.annulet.post.table.ModesJson;
+import org.annulet.post.table.TextTables;
 import org.annulet.post.vtk.ModeFiles;
 import org.annulet.post.vtk.Surface;
 
 /** Writes the answer of a {@link ModesStudy} into a folder. */
 public final class ModesFiles {
+  private static final double CHART_WIDTH = 900;
+  private static final double CHART_HEIGHT = 520;
   private static final int SWEPT_FACETS = 72;
   private static final int MOST_SWEPT_POINTS = 400_000;
 
@@ -33,6 +44,14 @@ public final class ModesFiles {
     removeOldFields(folder);
     ModesJson.write(folder.resolve("modes.json"), answer.results());
     ModesCsv.write(folder.resolve("modes.csv"), answer.results());
+    WholeFile.write(folder.resolve("modes.md"), TextTables.markdown(answer.results()));
+    WholeFile.write(
+        folder.resolve("spectrum.svg"),
+        SpectrumChart.svg(answer.results(), CHART_WIDTH, CHART_HEIGHT));
+    HtmlReport.write(
+        folder.resolve("report.html"),
+        new ReportInput(
+            answer.results(), answer.chamber(), facts(answer.caseFile()), List.of(), List.of()));
     List<ModeView> views = answer.results().modes().stream().map(ModeEntry::view).toList();
     Mesh mesh = answer.problem().shape().mesh();
     new ModeFiles(folder, mesh, Surface.flat(mesh)).modes("mode", views);
@@ -44,6 +63,22 @@ public final class ModesFiles {
       new ModeFiles(folder, mesh, Surface.swept(mesh, 2 * Math.PI, SWEPT_FACETS))
           .modes("swept", views);
     }
+  }
+
+  private static List<Fact> facts(CaseFile caseFile) {
+    List<Fact> facts = new ArrayList<>();
+    if (!caseFile.about().isBlank()) {
+      facts.add(new Fact("case", "about", caseFile.about().strip()));
+    }
+    for (CaseSource.Value v : caseFile.source().values()) {
+      int dot = v.key().indexOf('.');
+      facts.add(
+          new Fact(
+              dot < 0 ? "case" : v.key().substring(0, dot),
+              dot < 0 ? v.key() : v.key().substring(dot + 1),
+              v.text()));
+    }
+    return facts;
   }
 
   /** Fields of an earlier run with more modes would stand beside the new ones. */

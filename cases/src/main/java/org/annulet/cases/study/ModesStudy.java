@@ -4,26 +4,24 @@ import java.util.ArrayList;
 import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import org.annulet.cases.read.CaseFile;
-import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.meaning.Certificate;
 import org.annulet.post.meaning.Chamber;
+import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
 import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.assembly.NodalField;
-import org.annulet.solver.assembly.Ring;
-import org.annulet.solver.assembly.Section;
 import org.annulet.solver.eigen.ModeSearch;
 import org.annulet.solver.eigen.SearchSettings;
 import org.annulet.solver.modes.MeshError;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.modes.ModeSet;
+import org.annulet.solver.operator.AcousticOperator;
 
 /** Every mode of a case in its window, labelled and certified. */
 public final class ModesStudy {
@@ -42,11 +40,12 @@ public final class ModesStudy {
   /**
    * The answer.
    *
+   * @param caseFile the case
    * @param problem operators, mesh and gas
    * @param chamber the gas volume the modes live in
    * @param results modes with labels and certificates
    */
-  public record Answer(CaseProblem problem, Chamber chamber, Results results) {}
+  public record Answer(CaseFile caseFile, CaseProblem problem, Chamber chamber, Results results) {}
 
   /**
    * Meshes, assembles, searches and labels.
@@ -61,7 +60,7 @@ public final class ModesStudy {
             .toList();
     CaseProblem problem = ladder.get(LEVELS - 1);
     Found found = search(ladder);
-    Chamber chamber = chamber(problem);
+    Chamber chamber = GasVolume.of(problem);
     List<ModeEntry> inside = label(chamber, found.inside);
     List<ModeEntry> outside = label(chamber, found.outside);
     List<String> notes = new ArrayList<>();
@@ -75,13 +74,16 @@ public final class ModesStudy {
             inside,
             outside,
             notes);
-    return new Answer(problem, chamber, results);
+    return new Answer(caseFile, problem, chamber, results);
   }
+
+  /** An entry of the results, and the mode of the operator behind it. */
+  private record Listed(ModeView view, CaseProblem.Part part, Mode own) {}
 
   private static final class Found {
     final List<Certificate> certificates = new ArrayList<>();
-    final List<ModeView> inside = new ArrayList<>();
-    final List<ModeView> outside = new ArrayList<>();
+    final List<Listed> inside = new ArrayList<>();
+    final List<Listed> outside = new ArrayList<>();
   }
 
   /**
@@ -123,13 +125,15 @@ public final class ModesStudy {
               c.notes()));
       List<Mode> modes = all(set);
       for (int k = 0; k < modes.size(); k++) {
-        List<ModeView> views = k < set.modes().size() ? found.inside : found.outside;
-        views.addAll(views(part, modes.get(k), all.get(i).bars.get(k), mirror));
+        List<Listed> list = k < set.modes().size() ? found.inside : found.outside;
+        Mode own = modes.get(k);
+        views(part, own, all.get(i).bars.get(k), mirror)
+            .forEach(view -> list.add(new Listed(view, part, own)));
       }
     }
-    Comparator<ModeView> order =
-        Comparator.<ModeView>comparingDouble(v -> v.mode().frequency())
-            .thenComparingDouble(v -> v.mode().growthRate());
+    Comparator<Listed> order =
+        Comparator.<Listed>comparingDouble(l -> l.own.frequency())
+            .thenComparingDouble(l -> l.own.growthRate());
     found.inside.sort(order);
     found.outside.sort(order);
     return found;
@@ -192,51 +196,37 @@ public final class ModesStudy {
     return List.of(one, other);
   }
 
-  private static List<ModeEntry> label(Chamber chamber, List<ModeView> views) {
-    List<ModeLabel> labels = Labels.of(chamber, views);
+  private static List<ModeEntry> label(Chamber chamber, List<Listed> listed) {
+    List<ModeLabel> labels = Labels.of(chamber, listed.stream().map(Listed::view).toList());
     List<ModeEntry> entries = new ArrayList<>();
-    for (int i = 0; i < views.size(); i++) {
-      entries.add(new ModeEntry(views.get(i), labels.get(i), Optional.empty()));
+    for (int i = 0; i < listed.size(); i++) {
+      entries.add(
+          new ModeEntry(
+              listed.get(i).view, labels.get(i), Optional.of(budget(listed.get(i), listed))));
     }
     return entries;
   }
 
-  private static Chamber chamber(CaseProblem problem) {
-    Mesh mesh = problem.shape().mesh();
-    int triangles = mesh.triangleCount();
-    double[] density = new double[triangles];
-    double[] bulk = new double[triangles];
-    double[] thickness = new double[triangles];
-    for (int t = 0; t < triangles; t++) {
-      density[t] = problem.medium().density(t);
-      bulk[t] = problem.medium().bulkModulus(t);
-    }
-    if (problem.shape().geometry() instanceof Ring ring) {
-      double[] radius = new double[mesh.zoneNames().size()];
-      for (int z = 0; z < radius.length; z++) {
-        radius[z] = ring.zones().get(mesh.zoneNames().get(z)).meanRadius();
+  /** What drives and damps a mode; summed over an exact pair, whose members are not unique. */
+  private static GrowthBudget budget(Listed mode, List<Listed> all) {
+    AcousticOperator operator = mode.part.assembled().operator();
+    if (mode.own.multiplicity() == 2) {
+      Optional<Listed> partner =
+          all.stream()
+              .filter(o -> o.part == mode.part && o.own != mode.own)
+              .filter(o -> o.own.multiplicity() == 2)
+              .filter(o -> together(o.own, mode.own))
+              .findFirst();
+      if (partner.isPresent()) {
+        return GrowthBudget.ofPair(operator, mode.own, partner.get().own);
       }
-      for (int t = 0; t < triangles; t++) {
-        thickness[t] = ring.zones().get(mesh.zoneNames().get(mesh.zone(t))).gap();
-      }
-      return Chamber.ring(mesh, radius).withThickness(thickness).withGas(density, bulk);
     }
-    if (problem.shape().geometry() instanceof Section section) {
-      Map<String, Section.Ducts> ducts = section.ducts();
-      for (int t = 0; t < triangles; t++) {
-        Section.Ducts d = ducts.get(mesh.zoneNames().get(mesh.zone(t)));
-        double r = (mesh.cornerY(t, 0) + mesh.cornerY(t, 1) + mesh.cornerY(t, 2)) / 3;
-        thickness[t] = 2 * Math.PI * r * (d == null ? 1 : d.openShare());
-      }
-      return Chamber.section(mesh)
-          .withThickness(thickness)
-          .withSeparateDucts(ducts.keySet())
-          .withGas(density, bulk);
-    }
-    Chamber flat =
-        problem.shape().geometry() instanceof org.annulet.solver.assembly.CrossSection
-            ? Chamber.crossSection(mesh)
-            : Chamber.plane(mesh);
-    return flat.withGas(density, bulk);
+    return GrowthBudget.of(operator, mode.own);
+  }
+
+  private static boolean together(Mode a, Mode b) {
+    double distance =
+        Math.hypot(a.growthRate() - b.growthRate(), 2 * Math.PI * (a.frequency() - b.frequency()));
+    return distance < 1e-7 * 2 * Math.PI * a.frequency();
   }
 }
