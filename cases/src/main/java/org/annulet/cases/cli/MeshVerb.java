@@ -3,8 +3,7 @@ package org.annulet.cases.cli;
 import java.io.IOException;
 import java.nio.file.Path;
 import org.annulet.cases.read.CaseFile;
-import org.annulet.cases.study.ChamberShape;
-import org.annulet.mesher.mesh.Quality;
+import org.annulet.cases.study.MeshFiles;
 import picocli.CommandLine.Command;
 
 /** {@code annulet mesh CASE}. */
@@ -12,8 +11,8 @@ import picocli.CommandLine.Command;
 final class MeshVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
-    ChamberShape shape = ChamberShape.of(caseFile);
-    console().result(Quality.of(shape.mesh()).toString());
+    console().result(MeshFiles.write(caseFile, folder));
+    console().result("Written to " + folder);
     return ExitStatus.DONE;
   }
 }

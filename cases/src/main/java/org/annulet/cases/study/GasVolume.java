@@ -3,13 +3,26 @@ package org.annulet.cases.study;
 import java.util.Map;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.meaning.Chamber;
+import org.annulet.post.meaning.GeometryKind;
 import org.annulet.solver.assembly.CrossSection;
+import org.annulet.solver.assembly.Geometry;
 import org.annulet.solver.assembly.Ring;
 import org.annulet.solver.assembly.Section;
 
 /** The gas volume of a problem, handed on to labels, files and report. */
 final class GasVolume {
   private GasVolume() {}
+
+  /** What the coordinates of a geometry mean. */
+  static GeometryKind kind(Geometry geometry) {
+    if (geometry instanceof Ring) {
+      return GeometryKind.RING;
+    }
+    if (geometry instanceof Section) {
+      return GeometryKind.SECTION;
+    }
+    return geometry instanceof CrossSection ? GeometryKind.CROSS_SECTION : GeometryKind.PLANE;
+  }
 
   /** Mesh, gas and thickness of a problem, as labels and pictures need them. */
   static Chamber of(CaseProblem problem) {

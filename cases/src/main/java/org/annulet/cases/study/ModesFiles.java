@@ -10,6 +10,7 @@ import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseSource;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.chart.SpectrumChart;
+import org.annulet.post.chart.Svg;
 import org.annulet.post.files.WholeFile;
 import org.annulet.post.meaning.Chamber;
 import org.annulet.post.meaning.GeometryKind;
@@ -47,18 +48,18 @@ public final class ModesFiles {
     WholeFile.write(folder.resolve("modes.md"), TextTables.markdown(answer.results()));
     WholeFile.write(
         folder.resolve("spectrum.svg"),
-        SpectrumChart.svg(answer.results(), CHART_WIDTH, CHART_HEIGHT));
+        Svg.standalone(SpectrumChart.svg(answer.results(), CHART_WIDTH, CHART_HEIGHT)));
     HtmlReport.write(
         folder.resolve("report.html"),
         new ReportInput(
             answer.results(), answer.chamber(), facts(answer.caseFile()), List.of(), List.of()));
     List<ModeView> views = answer.results().modes().stream().map(ModeEntry::view).toList();
     Mesh mesh = answer.problem().shape().mesh();
-    new ModeFiles(folder, mesh, Surface.flat(mesh)).modes("mode", views);
     Chamber chamber = answer.chamber();
-    if (chamber.kind() == GeometryKind.RING) {
-      new ModeFiles(folder, mesh, Surface.wrapped(mesh, chamber.zoneRadii())).modes("ring", views);
-    } else if (chamber.kind() == GeometryKind.SECTION
+    boolean ring = chamber.kind() == GeometryKind.RING;
+    Surface surface = ring ? Surface.wrapped(mesh, chamber.zoneRadii()) : Surface.flat(mesh);
+    new ModeFiles(folder, mesh, surface).modes("mode", views);
+    if (chamber.kind() == GeometryKind.SECTION
         && (long) mesh.nodeCount() * SWEPT_FACETS < MOST_SWEPT_POINTS) {
       new ModeFiles(folder, mesh, Surface.swept(mesh, 2 * Math.PI, SWEPT_FACETS))
           .modes("swept", views);
@@ -86,9 +87,7 @@ public final class ModesFiles {
     List<Path> old;
     try (Stream<Path> files = Files.list(folder)) {
       old =
-          files
-              .filter(f -> f.getFileName().toString().matches("(mode|ring|swept)-\\d+\\.vtu"))
-              .toList();
+          files.filter(f -> f.getFileName().toString().matches("(mode|swept)-\\d+\\.vtu")).toList();
     }
     for (Path f : old) {
       Files.delete(f);

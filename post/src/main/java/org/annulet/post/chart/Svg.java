@@ -23,6 +23,20 @@ public final class Svg {
     return b.toString();
   }
 
+  /**
+   * A drawing for a file of its own: on white, and with the fallback of every CSS variable in its
+   * place, since few viewers outside a browser know variables.
+   *
+   * @param svg one SVG element
+   */
+  public static String standalone(String svg) {
+    String plain = svg.replaceAll("var\\(--[a-z0-9-]+,\\s*([^)]*)\\)", "$1");
+    int inside = plain.indexOf('>') + 1;
+    return plain.substring(0, inside)
+        + "\n<rect width=\"100%\" height=\"100%\" fill=\"#fff\"/>"
+        + plain.substring(inside);
+  }
+
   /** A coordinate with two decimals. */
   static String at(double v) {
     String s = String.format(Locale.ROOT, "%.2f", v);

@@ -1,0 +1,76 @@
+package org.annulet.cases.study;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.mesher.files.GmshWriter;
+import org.annulet.mesher.mesh.Mesh;
+import org.annulet.mesher.mesh.MeshCheck;
+import org.annulet.mesher.mesh.Quality;
+import org.annulet.post.chart.ChamberPicture;
+import org.annulet.post.chart.MeshPicture;
+import org.annulet.post.chart.PlaneView;
+import org.annulet.post.chart.Svg;
+import org.annulet.post.files.WholeFile;
+import org.annulet.post.vtk.Surface;
+import org.annulet.post.vtk.VtuFile;
+import org.annulet.solver.medium.Medium;
+
+/** The mesh of a case as files: MSH 4.1, VTU, pictures and a quality report. */
+public final class MeshFiles {
+  private MeshFiles() {}
+
+  /**
+   * Meshes a case and writes mesh.msh, mesh.vtu, mesh.svg, chamber.svg and quality.txt.
+   *
+   * @param folder made if absent
+   * @return the quality report
+   * @throws IOException if the folder cannot be written
+   */
+  public static String write(CaseFile caseFile, Path folder) throws IOException {
+    ChamberShape shape = ChamberShape.of(caseFile);
+    Mesh mesh = shape.mesh();
+    StringBuilder report = new StringBuilder();
+    Quality quality = Quality.of(mesh);
+    quality.lines().forEach(line -> report.append(line).append('\n'));
+    Medium gas = new CaseGas(caseFile).on(mesh);
+    double top = caseFile.window().highestFrequency();
+    for (int z = 0; z < mesh.zoneNames().size(); z++) {
+      double slowest = Double.POSITIVE_INFINITY;
+      for (int t = 0; t < mesh.triangleCount(); t++) {
+        if (mesh.zone(t) == z) {
+          slowest = Math.min(slowest, gas.soundSpeed(t));
+        }
+      }
+      report.append(
+          String.format(
+              Locale.ROOT,
+              "zone %s: sides per wavelength at %.6g Hz: at least %.1f%n",
+              mesh.zoneNames().get(z),
+              top,
+              quality.pointsPerWavelength(mesh.zoneNames().get(z), slowest, top)));
+    }
+    MeshCheck.of(mesh).forEach(f -> report.append("check: ").append(f).append('\n'));
+    Files.createDirectories(folder);
+    PlaneView view = PlaneView.of(GasVolume.kind(shape.geometry()));
+    GmshWriter.write(mesh, folder.resolve("mesh.msh"));
+    int[] zone = new int[mesh.triangleCount()];
+    Surface flat = Surface.flat(mesh);
+    for (int t = 0; t < zone.length; t++) {
+      zone[t] = mesh.zone(flat.sourceTriangle(t));
+    }
+    new VtuFile(flat)
+        .field("zone_names", mesh.zoneNames())
+        .cells("zone", zone)
+        .write(folder.resolve("mesh.vtu"));
+    WholeFile.write(folder.resolve("mesh.svg"), MeshPicture.svg(mesh, view));
+    WholeFile.write(
+        folder.resolve("chamber.svg"),
+        Svg.standalone(ChamberPicture.of(mesh, view, List.of()).svg()));
+    WholeFile.write(folder.resolve("quality.txt"), report.toString());
+    return report.toString().stripTrailing();
+  }
+}
