@@ -1,0 +1,208 @@
+package org.annulet.cases.cli;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
+import java.io.PrintStream;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+/**
+ * The program as a user meets it: what it prints, where it writes, what it answers to the shell.
+ */
+class CommandLineTest {
+  private static final String DUCT =
+      """
+      annulet: 1
+      title: closed duct
+      geometry:
+        kind: plane
+        depth: 10 mm
+        mesh_size: 20 mm
+        points: {a: [0 m, 0 m], b: [1 m, 0 m], c: [1 m, 40 mm], d: [0 m, 40 mm]}
+        edges: {floor: {line: [a, b]}, right: {line: [b, c]}, roof: {line: [c, d]}, left: {line: [d, a]}}
+        zones: {duct: {boundary: [floor, right, roof, left]}}
+      gas:
+        mean_pressure: 1 bar
+        zones: {duct: {sound_speed: 340 m/s, density: 1.2 kg/m3}}
+      window: {frequency: [50 Hz, 400 Hz], growth_rate: [-100 1/s, 100 1/s]}
+      """;
+
+  @TempDir private Path folder;
+  private final ByteArrayOutputStream out = new ByteArrayOutputStream();
+  private final ByteArrayOutputStream err = new ByteArrayOutputStream();
+
+  private ExitStatus run(String... args) {
+    Console console = new Console(stream(out), stream(err), false);
+    return Main.run(console, args);
+  }
+
+  private static PrintStream stream(ByteArrayOutputStream to) {
+    return new PrintStream(to, true, StandardCharsets.UTF_8);
+  }
+
+  private String printed() {
+    return out.toString(StandardCharsets.UTF_8);
+  }
+
+  private String complained() {
+    return err.toString(StandardCharsets.UTF_8);
+  }
+
+  private Path duct(String text) throws IOException {
+    Files.writeString(folder.resolve("case.yaml"), text);
+    return folder;
+  }
+
+  @Test
+  void closedDuct_writesEveryFileOfTheContract_andTheHalfWave() throws IOException {
+    // f = c/2L = 170 Hz and its double: closed form, REFERENCE_VALUES row C1.
+    Path results = folder.resolve("results");
+    ExitStatus status = run("modes", duct(DUCT).toString(), "--out", results.toString());
+
+    assertThat(complained()).isEmpty();
+    assertThat(status).isEqualTo(ExitStatus.DONE);
+    assertThat(names(results))
+        .contains(
+            "modes.json", "modes.csv", "mode-01.vtu", "mode-02.vtu", "mode.pvd", "report.html");
+    assertThat(Files.readString(results.resolve("modes.json")))
+        .contains("\"modes_by_argument_principle\": 2")
+        .contains("\"complete\": true");
+    String[] first = Files.readAllLines(results.resolve("modes.csv")).get(1).split(",");
+    assertThat(printed()).contains("2 modes in the window, certified complete");
+    assertThat(Stream.of(first).anyMatch(c -> c.startsWith("170.0")))
+        .as("%s", (Object) first)
+        .isTrue();
+    assertThat(printed()).contains("does not clear an engine to run");
+  }
+
+  @Test
+  void sameCaseTwice_sameBytes() throws IOException {
+    duct(DUCT);
+    run("modes", folder.toString(), "--out", folder.resolve("a").toString());
+    run("modes", folder.toString(), "--out", folder.resolve("b").toString());
+    for (String name : List.of("modes.json", "modes.csv", "mode-01.vtu", "report.html")) {
+      assertThat(folder.resolve("b").resolve(name))
+          .hasSameBinaryContentAs(folder.resolve("a").resolve(name));
+    }
+  }
+
+  @Test
+  void quiet_printsNothing_butStillWrites() throws IOException {
+    ExitStatus status =
+        run("modes", duct(DUCT).toString(), "--quiet", "--out", folder.resolve("q").toString());
+    assertThat(status).isEqualTo(ExitStatus.DONE);
+    assertThat(printed()).isEmpty();
+    assertThat(complained()).isEmpty();
+    assertThat(folder.resolve("q/modes.json")).exists();
+  }
+
+  @Test
+  void withoutOut_resultsStandBesideTheCaseFile() throws IOException {
+    run("modes", duct(DUCT).resolve("case.yaml").toString(), "--quiet");
+    assertThat(folder.resolve("out/modes.json")).exists();
+  }
+
+  @Test
+  void faultyCase_isStatus2_withEveryFault_lineAndRemedy_andNoFiles() throws IOException {
+    String broken = DUCT.replace("340 m/s", "340").replace("[50 Hz, 400 Hz]", "[400 Hz, 50 Hz]");
+    ExitStatus status = run("modes", duct(broken).toString());
+    assertThat(status).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained())
+        .contains("case.yaml:12:")
+        .contains("case.yaml:13:")
+        .contains("mend: ")
+        .contains("2 faults in the case")
+        .doesNotContain("Exception")
+        .doesNotContain("\tat ");
+    assertThat(folder.resolve("out")).doesNotExist();
+  }
+
+  @Test
+  void missingCase_isStatus2() {
+    assertThat(run("modes", folder.resolve("nowhere").toString()))
+        .isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained()).contains("no such file or folder");
+  }
+
+  @Test
+  void misspeltVerb_isStatus2_andNamesTheNearest() {
+    assertThat(run("mods", "somewhere")).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained()).contains("modes");
+  }
+
+  @Test
+  void noVerb_unknownOption_missingCase_areStatus2() {
+    assertThat(run()).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(run("modes")).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(run("modes", "x", "--wrong")).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained()).doesNotContain("\tat ");
+  }
+
+  @Test
+  void folderThatCannotBeMade_isStatus3_inPlainWords() throws IOException {
+    Path file = Files.writeString(folder.resolve("taken"), "a file, not a folder");
+    ExitStatus status = run("modes", duct(DUCT).toString(), "--out", file.toString());
+    assertThat(status).isEqualTo(ExitStatus.OUT_OF_RESOURCES);
+    assertThat(complained()).contains("taken").contains("--out").doesNotContain("\tat ");
+  }
+
+  @Test
+  void helpAndVersion_areStatus0() {
+    assertThat(run("--help")).isEqualTo(ExitStatus.DONE);
+    assertThat(run("modes", "--help")).isEqualTo(ExitStatus.DONE);
+    assertThat(run("--version")).isEqualTo(ExitStatus.DONE);
+    assertThat(printed())
+        .contains("Exit status")
+        .containsPattern("annulet \\d+\\.\\d+\\.\\d+ \\(commit ");
+  }
+
+  @Test
+  void check_printsEveryValueInSi() throws IOException {
+    assertThat(run("check", duct(DUCT).toString())).isEqualTo(ExitStatus.DONE);
+    assertThat(printed()).contains("geometry.depth").contains("0.01 m");
+  }
+
+  @Test
+  void mesh_writesMeshPicturesAndQuality() throws IOException {
+    Path results = folder.resolve("m");
+    assertThat(run("mesh", duct(DUCT).toString(), "--out", results.toString()))
+        .isEqualTo(ExitStatus.DONE);
+    assertThat(names(results))
+        .containsExactlyInAnyOrder(
+            "mesh.msh", "mesh.vtu", "mesh.svg", "chamber.svg", "quality.txt");
+    assertThat(printed()).contains("sides per wavelength");
+  }
+
+  @Test
+  void variants_areSolvedEachInItsFolder_andCompared() throws IOException {
+    String variants =
+        DUCT
+            + """
+            variants:
+              - {name: cool, set: {gas.zones.duct.sound_speed: 320 m/s}}
+              - {name: warm, set: {gas.zones.duct.sound_speed: 360 m/s}}
+            """;
+    Path results = folder.resolve("v");
+    assertThat(run("modes", duct(variants).toString(), "--out", results.toString()))
+        .isEqualTo(ExitStatus.DONE);
+    assertThat(results.resolve("cool/modes.json")).exists();
+    assertThat(results.resolve("warm/modes.json")).exists();
+    assertThat(printed())
+        .contains("Least stable mode of each variant")
+        .contains("cool")
+        .contains("warm");
+  }
+
+  private static List<String> names(Path folder) throws IOException {
+    try (Stream<Path> files = Files.list(folder)) {
+      return files.map(f -> f.getFileName().toString()).toList();
+    }
+  }
+}
