@@ -1,12 +1,12 @@
 package org.annulet.cases.study;
 
 import java.util.ArrayList;
-import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import org.annulet.cases.read.CaseFile;
+import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.meaning.Certificate;
 import org.annulet.post.meaning.Chamber;
 import org.annulet.post.meaning.GrowthBudget;
@@ -15,12 +15,14 @@ import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
 import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.Results;
+import org.annulet.solver.assembly.AssembledProblem;
 import org.annulet.solver.assembly.NodalField;
 import org.annulet.solver.eigen.ModeSearch;
 import org.annulet.solver.eigen.SearchSettings;
 import org.annulet.solver.modes.MeshError;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.modes.ModeSet;
+import org.annulet.solver.modes.Window;
 import org.annulet.solver.operator.AcousticOperator;
 
 /** Every mode of a case in its window, labelled and certified. */
@@ -140,20 +142,35 @@ public final class ModesStudy {
   }
 
   private Solved solve(List<CaseProblem> ladder, int part) {
-    List<ModeSet> sets = new ArrayList<>();
+    Mesh coarsest = ladder.get(0).shape().mesh();
+    List<ErrorBars.Level> levels = new ArrayList<>();
+    ModeSet set = null;
     for (CaseProblem level : ladder) {
-      sets.add(
+      AssembledProblem assembled = level.parts().get(part).assembled();
+      boolean finest = level == ladder.get(ladder.size() - 1);
+      set =
           ModeSearch.find(
-              level.parts().get(part).assembled().operator(),
-              caseFile.window(),
-              SearchSettings.standard()));
+              assembled.operator(),
+              finest ? caseFile.window() : wider(caseFile.window()),
+              SearchSettings.standard());
+      CommonPlaces places = new CommonPlaces(coarsest, level.shape().mesh());
+      List<Mode> modes = all(set);
+      levels.add(
+          new ErrorBars.Level(
+              modes,
+              modes.stream().map(m -> places.of(assembled.expand(m.re(), m.im()))).toList()));
     }
-    ModeSet finest = sets.get(sets.size() - 1);
-    List<Optional<MeshError>> bars =
-        sets.size() < LEVELS
-            ? Collections.nCopies(all(finest).size(), Optional.empty())
-            : ErrorBars.of(all(sets.get(0)), all(sets.get(1)), all(finest));
-    return new Solved(finest, bars);
+    return new Solved(set, ErrorBars.of(levels.get(0), levels.get(1), levels.get(2)));
+  }
+
+  /** A coarse mesh moves modes over the window's edge, upwards above all. */
+  private static Window wider(Window w) {
+    double growth = 0.1 * (w.highestGrowth() - w.lowestGrowth());
+    return new Window(
+        0.9 * w.lowestFrequency(),
+        1.15 * w.highestFrequency(),
+        w.lowestGrowth() - growth,
+        w.highestGrowth() + growth);
   }
 
   private static List<Mode> all(ModeSet set) {
