@@ -72,6 +72,9 @@ public final class ModesFiles {
       facts.add(new Fact("case", "about", caseFile.about().strip()));
     }
     for (CaseSource.Value v : caseFile.source().values()) {
+      if (v.key().startsWith("geometry.points.")) {
+        continue; // the picture shows them better
+      }
       int dot = v.key().indexOf('.');
       facts.add(
           new Fact(

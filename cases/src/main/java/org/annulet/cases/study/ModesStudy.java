@@ -17,6 +17,7 @@ import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.assembly.AssembledProblem;
 import org.annulet.solver.assembly.NodalField;
+import org.annulet.solver.assembly.Ring;
 import org.annulet.solver.eigen.ModeSearch;
 import org.annulet.solver.eigen.SearchSettings;
 import org.annulet.solver.modes.MeshError;
@@ -67,6 +68,9 @@ public final class ModesStudy {
     List<ModeEntry> outside = label(chamber, found.outside);
     List<String> notes = new ArrayList<>();
     notes.add(problem.method());
+    if (problem.shape().geometry() instanceof Ring ring) {
+      ThinGap.sentence(ring, inside, chamber.mesh().zoneNames()).ifPresent(notes::add);
+    }
     Results results =
         new Results(
             caseFile.title(),

@@ -1,6 +1,7 @@
 package org.annulet.solver.eigen;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.function.UnaryOperator;
 import org.annulet.solver.dense.ComplexMatrix;
@@ -103,6 +104,10 @@ public final class ModeSearch {
       return ReducedBasis.everything(prepared);
     }
     ReducedBasis basis = new ReducedBasis(prepared);
+    // Never empty, also where no passive mode is near and nothing responds: constant pressure.
+    double[] ones = new double[prepared.size()];
+    Arrays.fill(ones, 1);
+    basis.add(ones);
     for (double[] v : passive.vectors()) {
       basis.add(v);
     }
