@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
+import org.annulet.mesher.files.FaultPicture;
 import org.annulet.mesher.geometry.GeometryFault;
 import org.annulet.mesher.geometry.RingShape;
 import org.annulet.mesher.geometry.Zone;
@@ -65,9 +66,13 @@ public final class DrawnShape {
    */
   public static List<Problem> problems(CaseSource source, GeometryFault fault) {
     List<Problem> problems = new ArrayList<>();
-    for (GeometryFault.Fault f : fault.faults()) {
+    for (int i = 0; i < fault.faults().size(); i++) {
+      GeometryFault.Fault f = fault.faults().get(i);
       String[] text = f.toString().split("\\R\\s*mend: ", 2);
-      problems.add(source.problem(key(source, f.what()), text[0], f.mend()));
+      problems.add(
+          source
+              .problem(key(source, f.what()), text[0], f.mend())
+              .withPicture(FaultPicture.svg(fault, i).orElse("")));
     }
     return problems;
   }

@@ -9,8 +9,20 @@ package org.annulet.cases.read;
  * @param key path of the key, as in {@code geometry.zones.chamber.length}; may be empty
  * @param what what is wrong, with the value read
  * @param mend what is allowed, or what to write; may be empty
+ * @param picture SVG of the spot in the drawing; empty where there is none
  */
-public record Problem(String file, int line, int column, String key, String what, String mend) {
+public record Problem(
+    String file, int line, int column, String key, String what, String mend, String picture) {
+  /** A fault without a picture. */
+  public Problem(String file, int line, int column, String key, String what, String mend) {
+    this(file, line, column, key, what, mend, "");
+  }
+
+  /** The same fault with a picture of the spot. */
+  public Problem withPicture(String svg) {
+    return new Problem(file, line, column, key, what, mend, svg);
+  }
+
   /** Two lines for the terminal: {@code case.yaml:41:7: key: what} and {@code mend: …}. */
   @Override
   public String toString() {

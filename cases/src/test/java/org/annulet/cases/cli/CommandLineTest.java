@@ -125,6 +125,25 @@ class CommandLineTest {
   }
 
   @Test
+  void outlineThatCrossesItself_isDrawnAtTheSpot() throws IOException {
+    String crossed =
+        DUCT.replace("{line: [b, c]}", "{line: [b, d]}")
+            .replace("{line: [c, d]}", "{line: [d, c]}")
+            .replace("{line: [d, a]}", "{line: [c, a]}");
+    ExitStatus status = run("mesh", duct(crossed).toString());
+    assertThat(status).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained())
+        .contains("case.yaml:")
+        .contains("cross")
+        .contains("picture of the spot");
+    assertThat(Files.readString(folder.resolve("out/fault-01.svg")))
+        .startsWith("<svg")
+        .contains(">right<")
+        .contains(">left<")
+        .contains("(0.500000, 0.0200000) m");
+  }
+
+  @Test
   void missingCase_isStatus2() {
     assertThat(run("modes", folder.resolve("nowhere").toString()))
         .isEqualTo(ExitStatus.INPUT_FAULT);

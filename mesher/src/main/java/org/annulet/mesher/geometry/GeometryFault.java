@@ -46,7 +46,17 @@ public final class GeometryFault extends IllegalArgumentException {
     }
   }
 
+  /**
+   * An edge as far as it could be drawn, for a picture of the spot.
+   *
+   * @param edge its name
+   * @param x first coordinates of points along it in m, not modified
+   * @param y second coordinates in m, not modified
+   */
+  public record Line(String edge, double[] x, double[] y) {}
+
   private final transient List<Fault> faults;
+  private final transient List<Line> drawing;
 
   /**
    * An exception for these faults.
@@ -54,8 +64,24 @@ public final class GeometryFault extends IllegalArgumentException {
    * @param faults at least one
    */
   public GeometryFault(List<Fault> faults) {
+    this(faults, List.of());
+  }
+
+  /**
+   * An exception for these faults.
+   *
+   * @param faults at least one
+   * @param drawing the edges as far as they could be drawn
+   */
+  public GeometryFault(List<Fault> faults, List<Line> drawing) {
     super(text(faults));
     this.faults = List.copyOf(faults);
+    this.drawing = List.copyOf(drawing);
+  }
+
+  /** The edges as far as they could be drawn; may be empty. */
+  public List<Line> drawing() {
+    return drawing;
   }
 
   /** The faults, at least one. */

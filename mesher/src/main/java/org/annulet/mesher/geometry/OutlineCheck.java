@@ -39,8 +39,23 @@ final class OutlineCheck {
 
   private void stopOnFaults() {
     if (!faults.isEmpty()) {
-      throw new GeometryFault(faults);
+      throw new GeometryFault(faults, edges.stream().map(OutlineCheck::line).toList());
     }
+  }
+
+  /** An edge as a chain of short chords. */
+  private static GeometryFault.Line line(Edge edge) {
+    int steps = 24;
+    int n = edge.pieces().size();
+    double[] x = new double[n * steps + 1];
+    double[] y = new double[n * steps + 1];
+    for (int i = 0; i <= n * steps; i++) {
+      CurvePiece piece = edge.pieces().get(Math.min(i / steps, n - 1));
+      double t = i == n * steps ? 1 : (i % steps) / (double) steps;
+      x[i] = piece.x(t);
+      y[i] = piece.y(t);
+    }
+    return new GeometryFault.Line(edge.name(), x, y);
   }
 
   private void fault(Kind kind, String what, String mend) {
