@@ -20,6 +20,7 @@ import org.apache.commons.math3.complex.Complex;
  */
 final class Polish {
   private static final int LARGEST_STEPS = 8;
+  private static final int LARGEST_CORRECTIONS = 4;
   private static final double SAME = 1e-11;
   private final PreparedOperator prepared;
   private final double target;
@@ -35,6 +36,18 @@ final class Polish {
     boolean converged(int j) {
       return errors[j] <= bound;
     }
+
+    boolean converged() {
+      return largestError() <= bound;
+    }
+
+    double largestError() {
+      double largest = 0;
+      for (double e : errors) {
+        largest = Math.max(largest, e);
+      }
+      return largest;
+    }
   }
 
   Polish(PreparedOperator prepared, double target) {
@@ -43,33 +56,66 @@ final class Polish {
   }
 
   Polished run(Complex[] start, ComplexMatrix basis) {
-    Complex[] s = start;
-    ComplexMatrix p = basis;
+    Polished now = null;
     Polished best = null;
     for (int k = 1; k <= LARGEST_STEPS; k++) {
-      Complex mean = mean(s);
+      Complex mean = mean(now == null ? start : now.values());
       if (!Double.isFinite(mean.abs())) {
         break;
       }
-      ComplexMatrix x = prepared.derivativeTimes(mean, p);
-      prepared.at(mean.add(beside(k).multiply(mean.abs()))).solve(x);
-      ComplexMatrix q = OrthonormalColumns.of(x, 1e-12);
-      if (q == null || q.columns() < s.length) {
+      OperatorAt beside = prepared.at(mean.add(beside(k).multiply(mean.abs())));
+      ComplexMatrix x = prepared.derivativeTimes(mean, now == null ? basis : now.vectors());
+      beside.solve(x);
+      now = project(x, mean, start.length, k);
+      if (now == null) {
         break;
       }
-      ProjectedOperator small = ProjectedOperator.onComplex(prepared, q);
-      s = new Complex[s.length];
-      p = q.times(solveNear(small, mean, s));
-      Polished now = judge(s, p, k);
-      boolean better = best == null || largest(now.errors()) < largest(best.errors());
-      boolean done = largest(now.errors()) <= now.bound();
-      double gain = best == null ? 0 : largest(now.errors()) / largest(best.errors());
-      best = better ? now : best;
-      if (done || gain > 0.5 && k > 5) {
+      now = correct(now, beside, k);
+      double gain = best == null ? 0 : now.largestError() / best.largestError();
+      best = best == null || gain < 1 ? now : best;
+      if (best.converged() || gain > 0.5 && k > 5) {
         break;
       }
     }
     return best != null ? best : judge(start, basis, 0);
+  }
+
+  /**
+   * Residual inverse iteration (Neumaier 1985): p ← p − L(σ)⁻¹ L(s) p on the factor at hand, as
+   * long as that pays. Each step wins the factor |s − σ| over the distance to the next root, and
+   * takes the rounding of the large solution of plain inverse iteration out of the vector.
+   */
+  private Polished correct(Polished start, OperatorAt beside, int factorisations) {
+    Polished best = start;
+    for (int i = 0; i < LARGEST_CORRECTIONS && !best.converged(); i++) {
+      ComplexMatrix p = best.vectors().copy();
+      ComplexMatrix r = new ComplexMatrix(p.rows(), p.columns());
+      for (int j = 0; j < p.columns(); j++) {
+        ComplexMatrix own = prepared.times(best.values()[j], p.columnsFrom(j, 1));
+        System.arraycopy(own.re()[0], 0, r.re()[j], 0, p.rows());
+        System.arraycopy(own.im()[0], 0, r.im()[j], 0, p.rows());
+      }
+      beside.solve(r);
+      p.add(Complex.ONE.negate(), r);
+      Polished next = project(p, mean(best.values()), p.columns(), factorisations);
+      if (next == null || !(next.largestError() < 0.5 * best.largestError())) {
+        break;
+      }
+      best = next;
+    }
+    return best;
+  }
+
+  /** Roots and vectors of the operator projected onto a block; null if the block lost a column. */
+  private Polished project(ComplexMatrix block, Complex mean, int roots, int factorisations) {
+    ComplexMatrix q = OrthonormalColumns.of(block, 1e-12);
+    if (q == null || q.columns() < roots) {
+      return null;
+    }
+    ProjectedOperator small = ProjectedOperator.onComplex(prepared, q);
+    Complex[] s = new Complex[roots];
+    ComplexMatrix p = q.times(solveNear(small, mean, s));
+    return judge(s, p, factorisations);
   }
 
   /**
@@ -121,14 +167,6 @@ final class Polish {
       floor = Math.max(floor, prepared.roundingFloor(s[j], p, j));
     }
     return new Polished(s, p, errors, Math.max(target, 4 * floor), factorisations);
-  }
-
-  private static double largest(double[] x) {
-    double m = 0;
-    for (double v : x) {
-      m = Math.max(m, v);
-    }
-    return m;
   }
 
   private static Complex mean(Complex[] s) {

@@ -100,7 +100,7 @@ class DenseKitTest {
     for (int j = 0; j < n; j++) {
       us.scaleColumn(j, svd.values()[j]);
     }
-    assertThat(difference(us.times(ContourTranspose.adjoint(svd.right())), a)).isLessThan(1e-13);
+    assertThat(difference(us.times(adjoint(svd.right())), a)).isLessThan(1e-13);
     assertThat(difference(svd.left().adjointTimes(svd.left()), ComplexMatrix.identity(n)))
         .isLessThan(1e-13);
     ComplexMatrix low = a.times(random(n, 2, 5)).times(random(2, 10, 6));
@@ -108,15 +108,65 @@ class DenseKitTest {
     assertThat(OrthonormalColumns.of(low, 1e-10).columns()).isEqualTo(Math.min(2, n));
   }
 
-  private static final class ContourTranspose {
-    static ComplexMatrix adjoint(ComplexMatrix a) {
-      ComplexMatrix b = new ComplexMatrix(a.columns(), a.rows());
-      for (int i = 0; i < a.rows(); i++) {
-        for (int j = 0; j < a.columns(); j++) {
-          b.set(j, i, a.get(i, j).conjugate());
-        }
+  @ParameterizedTest
+  @ValueSource(longs = {1, 2, 3, 4})
+  void realMatrices_haveTheEigenvaluesThatLapackFinds(long seed) throws Exception {
+    // LAPACK dgeev in MTJ
+    PureJavaNetlib.select();
+    int n = 25;
+    Random r = new Random(seed);
+    ComplexMatrix a = new ComplexMatrix(n, n);
+    var same = new no.uib.cipr.matrix.DenseMatrix(n, n);
+    for (int j = 0; j < n; j++) {
+      for (int i = 0; i < n; i++) {
+        a.re()[j][i] = r.nextGaussian();
+        same.set(i, j, a.re()[j][i]);
       }
-      return b;
     }
+    var lapack = no.uib.cipr.matrix.EVD.factorize(same);
+    Complex[] ours = new ComplexEigen(a).values();
+    for (int k = 0; k < n; k++) {
+      Complex exact = new Complex(lapack.getRealEigenvalues()[k], lapack.getImaginaryEigenvalues()[k]);
+      // rounding times the condition of an eigenvalue of a random matrix of this size
+      assertThat(java.util.Arrays.stream(ours).filter(w -> w.subtract(exact).abs() < 1e-10))
+          .as("eigenvalue %s, seed %d", exact, seed)
+          .hasSize(1);
+    }
+  }
+
+  @ParameterizedTest
+  @ValueSource(longs = {1, 2, 3})
+  void determinantAndSingularValues_areThoseOfCommonsMath(long seed) {
+    int n = 9;
+    Random r = new Random(seed);
+    ComplexMatrix a = new ComplexMatrix(n, n);
+    double[][] rows = new double[n][n];
+    for (int j = 0; j < n; j++) {
+      for (int i = 0; i < n; i++) {
+        rows[i][j] = a.re()[j][i] = r.nextGaussian();
+      }
+    }
+    var real = new org.apache.commons.math3.linear.Array2DRowRealMatrix(rows);
+    double det = new org.apache.commons.math3.linear.LUDecomposition(real).getDeterminant();
+    LogDeterminant ours = new ComplexLu(a.copy()).logDeterminant();
+    assertThat(Math.exp(ours.logModulus()) * Math.cos(ours.phase()))
+        .isCloseTo(det, within(1e-11 * Math.abs(det)));
+    assertThat(Math.abs(Math.sin(ours.phase()))).isLessThan(1e-12);
+    double[] sigma =
+        new org.apache.commons.math3.linear.SingularValueDecomposition(real).getSingularValues();
+    double[] values = new ComplexSvd(a).values();
+    for (int k = 0; k < n; k++) {
+      assertThat(values[k]).isCloseTo(sigma[k], within(1e-12 * sigma[0]));
+    }
+  }
+
+  private static ComplexMatrix adjoint(ComplexMatrix a) {
+    ComplexMatrix b = new ComplexMatrix(a.columns(), a.rows());
+    for (int i = 0; i < a.rows(); i++) {
+      for (int j = 0; j < a.columns(); j++) {
+        b.set(j, i, a.get(i, j).conjugate());
+      }
+    }
+    return b;
   }
 }

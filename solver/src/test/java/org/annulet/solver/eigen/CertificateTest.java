@@ -1,0 +1,106 @@
+package org.annulet.solver.eigen;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import java.util.Arrays;
+import java.util.List;
+import org.annulet.solver.eigen.Gallery.Duct;
+import org.annulet.solver.eigen.Gallery.End;
+import org.annulet.solver.modes.Mode;
+import org.annulet.solver.modes.ModeSet;
+import org.annulet.solver.modes.Window;
+import org.annulet.solver.operator.AcousticOperator;
+import org.junit.jupiter.api.Test;
+
+/** What is damaged must come out as incomplete; what lies on the edge must be said to. */
+class CertificateTest {
+  private static final Window WINDOW = new Window(4.8, 700, -1500, 1500);
+
+  private static PreparedOperator strongFlame() {
+    return new PreparedOperator(
+        new Duct(End.CLOSED, End.OPEN, 347, 850, 0.3).withFlame(200, 5, 3e-3, null));
+  }
+
+  private static ModeSet spoiled(SearchSettings settings, ModeSearch.Spoilers spoilers) {
+    return new ModeSearch(strongFlame(), WINDOW, settings, spoilers).run();
+  }
+
+  @Test
+  void halfTheBasisRemoved_isNotComplete() {
+    ModeSet set =
+        spoiled(
+            SearchSettings.standard(),
+            new ModeSearch.Spoilers(
+                q -> {
+                  double[][] half = new double[q.length / 2][];
+                  Arrays.setAll(half, i -> q[2 * i + 1]);
+                  return half;
+                },
+                m -> m));
+
+    assertThat(set.complete()).isFalse();
+    assertThat(set.countByArgumentPrinciple()).isEqualTo(5);
+  }
+
+  @Test
+  void aModeDeletedFromTheResult_isNotComplete() {
+    ModeSet set =
+        spoiled(
+            SearchSettings.standard(),
+            new ModeSearch.Spoilers(q -> q, m -> m.subList(1, m.size())));
+
+    assertThat(set.complete()).isFalse();
+    assertThat(set.countByArgumentPrinciple()).isEqualTo(5);
+    assertThat(set.notes()).anyMatch(n -> n.contains("argument principle gives 5"));
+  }
+
+  @Test
+  void aCountWithTooFewPoints_isNotComplete() {
+    ModeSet set =
+        spoiled(new SearchSettings(1e-10, 1, 4, 8), ModeSearch.Spoilers.none());
+
+    assertThat(set.complete()).isFalse();
+    assertThat(set.countByArgumentPrinciple()).isEqualTo(-1);
+    assertThat(set.notes()).anyMatch(n -> n.contains("did not settle"));
+  }
+
+  @Test
+  void unspoiled_isComplete() {
+    assertThat(spoiled(SearchSettings.standard(), ModeSearch.Spoilers.none()).complete()).isTrue();
+  }
+
+  @Test
+  void aModeOnTheWindowsEdge_isSaidToBeSo() {
+    AcousticOperator op =
+        new Duct(End.CLOSED, End.OPEN, 347, 850, 0.3).withFlame(200, 5, 3e-3, null);
+    Mode second = ModeSearch.find(op, WINDOW, SearchSettings.standard()).modes().get(1);
+
+    ModeSet set =
+        ModeSearch.find(
+            op,
+            new Window(100, second.frequency(), -1000, 1000),
+            SearchSettings.standard());
+
+    assertThat(set.complete()).as("%s", set.notes()).isTrue();
+    assertThat(set.modes()).hasSize(1);
+    assertThat(set.modes().get(0).verdict()).isEqualTo(Mode.Verdict.ON_THE_EDGE);
+    assertThat(set.contour().highestFrequency()).isGreaterThan(second.frequency());
+  }
+
+  @Test
+  void passiveModesOfARing_areCompleteByInertia_bothMembersOfEveryPair() {
+    // reference value E1: m c/(2πR); 800 m/s, R = 0.5 m; 0 Hz, then pairs up to m = 6
+    PassiveModes.Spectrum passive =
+        PassiveModes.below(Gallery.ring(480, new double[0], 0), 6.5 * 254.647909);
+
+    assertThat(passive.complete()).isTrue();
+    assertThat(passive.omegaSquared()).hasSize(13);
+    for (int m = 1; m <= 6; m++) {
+      for (int i : List.of(2 * m - 1, 2 * m)) {
+        // (kh)²/24 with kh = 0.079 at m = 6
+        assertThat(passive.frequency(i))
+            .isCloseTo(m * 254.647909, org.assertj.core.data.Percentage.withPercentage(0.03));
+      }
+    }
+  }
+}
