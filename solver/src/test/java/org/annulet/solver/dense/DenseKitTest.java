@@ -126,7 +126,8 @@ class DenseKitTest {
     var lapack = no.uib.cipr.matrix.EVD.factorize(same);
     Complex[] ours = new ComplexEigen(a).values();
     for (int k = 0; k < n; k++) {
-      Complex exact = new Complex(lapack.getRealEigenvalues()[k], lapack.getImaginaryEigenvalues()[k]);
+      Complex exact =
+          new Complex(lapack.getRealEigenvalues()[k], lapack.getImaginaryEigenvalues()[k]);
       // rounding times the condition of an eigenvalue of a random matrix of this size
       assertThat(java.util.Arrays.stream(ours).filter(w -> w.subtract(exact).abs() < 1e-10))
           .as("eigenvalue %s, seed %d", exact, seed)

@@ -56,8 +56,7 @@ class CertificateTest {
 
   @Test
   void aCountWithTooFewPoints_isNotComplete() {
-    ModeSet set =
-        spoiled(new SearchSettings(1e-10, 1, 4, 8), ModeSearch.Spoilers.none());
+    ModeSet set = spoiled(new SearchSettings(1e-10, 1, 4, 8), ModeSearch.Spoilers.none());
 
     assertThat(set.complete()).isFalse();
     assertThat(set.countByArgumentPrinciple()).isEqualTo(-1);
@@ -77,9 +76,7 @@ class CertificateTest {
 
     ModeSet set =
         ModeSearch.find(
-            op,
-            new Window(100, second.frequency(), -1000, 1000),
-            SearchSettings.standard());
+            op, new Window(100, second.frequency(), -1000, 1000), SearchSettings.standard());
 
     assertThat(set.complete()).as("%s", set.notes()).isTrue();
     assertThat(set.modes()).hasSize(1);

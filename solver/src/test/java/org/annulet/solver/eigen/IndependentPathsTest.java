@@ -73,8 +73,7 @@ class IndependentPathsTest {
     for (Mode m : start) {
       Complex root = s(m);
       ComplexMatrix p =
-          ComplexMatrix.onColumns(
-              new double[][] {m.re().clone()}, new double[][] {m.im().clone()});
+          ComplexMatrix.onColumns(new double[][] {m.re().clone()}, new double[][] {m.im().clone()});
       for (int k = 1; k <= 45; k++) {
         PreparedOperator step = new PreparedOperator(FLAME_OF_STRENGTH.apply(0.5 + 0.1 * k));
         Polish.Polished next = new Polish(step, 1e-10).run(new Complex[] {root}, p);

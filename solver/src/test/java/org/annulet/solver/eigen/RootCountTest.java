@@ -119,7 +119,8 @@ class RootCountTest {
     double l = 0.02 / 340;
     double omega0 = 2 * Math.PI * 180;
     Gallery.Resonant wall = new Gallery.Resonant(0.05, l, omega0);
-    AcousticOperator op = new Duct(End.CLOSED, End.CLOSED, 340, 340, 0.5).withFlame(200, 0, 0, wall);
+    AcousticOperator op =
+        new Duct(End.CLOSED, End.CLOSED, 340, 340, 0.5).withFlame(200, 0, 0, wall);
     PreparedOperator prepared = new PreparedOperator(op);
     Rectangle window = Rectangle.of(new Window(5, 420, -1000, 1000));
     RootCount.Sampled exact =
@@ -127,8 +128,7 @@ class RootCountTest {
           Complex sz = s.multiply(s).add(omega0 * omega0).multiply(l).add(s.multiply(0.05));
           Complex x = s.divide(340);
           Complex v = sz.multiply(x.sinh()).add(s.multiply(x.cosh()));
-          return new RootCount.Sample(
-              new LogDeterminant(Math.log(v.abs()), v.getArgument()), null);
+          return new RootCount.Sample(new LogDeterminant(Math.log(v.abs()), v.getArgument()), null);
         };
     RootCount.Fineness fine = new RootCount.Fineness(50, 10_000);
 
