@@ -14,6 +14,7 @@ import org.annulet.solver.modes.Window;
  * @param geometry shape of the gas
  * @param gas the gas in it
  * @param walls by edge or face name, in the order of the file; others are rigid
+ * @param twoPorts losses across inner edges, in the order of the file; may be empty
  * @param flames in the order of the file; may be empty
  * @param window where modes are wanted
  * @param azimuthalOrders orders m wanted on a section, increasing; empty for other kinds
@@ -28,6 +29,7 @@ public record CaseFile(
     Geometry geometry,
     Gas gas,
     Map<String, Wall> walls,
+    List<TwoPort> twoPorts,
     List<Flame> flames,
     Window window,
     List<Integer> azimuthalOrders,

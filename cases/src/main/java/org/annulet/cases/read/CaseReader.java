@@ -126,10 +126,22 @@ public final class CaseReader {
     List<String> zones = geometry.map(Geometry::zoneNames).orElse(List.of());
     Gas gas = m.get("gas").map(e -> GasReader.read(e, zones)).orElse(new Gas(Double.NaN, Map.of()));
     Map<String, Wall> walls = m.get("walls").map(e -> WallReader.read(e, names)).orElse(Map.of());
+    List<TwoPort> twoPorts =
+        geometry.isPresent()
+            ? m.get("two_ports").map(new TwoPortReader(shape)::read).orElse(List.of())
+            : List.of();
     List<Flame> flames =
         geometry.isPresent()
             ? m.get("flames").map(new FlameReader(shape)::read).orElse(List.of())
             : List.of();
+    if (!flames.isEmpty()
+        && twoPorts.isEmpty()
+        && walls.values().stream().noneMatch(Wall::takesEnergy)) {
+      m.at("flames")
+          .caution(
+              "flames, and no loss anywhere: every mode the flames drive will grow",
+              "give the burners their pressure loss under 'two_ports', and the ends their impedance");
+    }
     Optional<WindowReader> window = m.get("window").map(e -> WindowReader.read(e, shape));
     CaseFile.Outputs outputs =
         m.get("outputs").map(CaseReader::outputs).orElse(new CaseFile.Outputs(Integer.MAX_VALUE));
@@ -145,6 +157,7 @@ public final class CaseReader {
                 shape,
                 gas,
                 walls,
+                twoPorts,
                 flames,
                 window.orElseThrow().window(),
                 window.orElseThrow().orders(),

@@ -2,6 +2,11 @@ package org.annulet.cases.read;
 
 /** What a named edge or a face of a ring does to the gas. Edges without one are rigid. */
 public sealed interface Wall {
+  /** Whether it takes energy out of the gas or feeds it. */
+  default boolean takesEnergy() {
+    return !(this instanceof Rigid || this instanceof Open);
+  }
+
   /** No flow through it. */
   record Rigid() implements Wall {}
 

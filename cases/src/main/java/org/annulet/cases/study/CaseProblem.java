@@ -84,6 +84,7 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
       CaseFile caseFile, Mesh mesh, ChamberShape shape, Medium medium) {
     ProblemBuilder b = new ProblemBuilder(mesh, shape.geometry(), medium);
     CaseWalls.put(caseFile, b);
+    CaseTwoPorts.put(caseFile, mesh, medium, b);
     new CaseFlames(caseFile).all().forEach(b::flame);
     return b;
   }

@@ -4,6 +4,7 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.stream.Stream;
 import org.annulet.cases.read.CaseFile;
@@ -53,7 +54,15 @@ public final class ModesFiles {
         folder.resolve("report.html"),
         new ReportInput(
             answer.results(), answer.chamber(), facts(answer.caseFile()), List.of(), List.of()));
-    List<ModeView> views = answer.results().modes().stream().map(ModeEntry::view).toList();
+    int most = answer.caseFile().outputs().fieldFiles();
+    List<ModeView> all = answer.results().modes().stream().map(ModeEntry::view).toList();
+    List<ModeView> views =
+        all.size() <= most
+            ? all
+            : all.stream()
+                .sorted(Comparator.comparingDouble(v -> -v.mode().growthRate()))
+                .limit(most)
+                .toList();
     Mesh mesh = answer.problem().shape().mesh();
     Chamber chamber = answer.chamber();
     boolean ring = chamber.kind() == GeometryKind.RING;

@@ -150,6 +150,49 @@ class BrokenCasesTest {
         ring("kind: ring", "kind: rnig", 4, "'rnig' is not one of the words", "write 'ring'?"),
         ring("  kind: ring\n", "", 4, "the key 'kind' is missing", "cross_section"),
         ring("shape: ducts", "shape: duct", 10, "'duct' is not one of the words", "write 'ducts'?"),
+        // losses
+        ring(
+            "flames:",
+            "two_ports: {burner.inlet: {effective_length: 9 mm}}\nflames:",
+            21,
+            "no inner edge 'burner.inlet'",
+            "'burners.inlet'?"),
+        ring(
+            "flames:",
+            "two_ports: {plenum.upstream: {effective_length: 9 mm}}\nflames:",
+            21,
+            "is a wall: a two-port has gas on both sides",
+            "burners.inlet"),
+        ring(
+            "flames:",
+            "two_ports: {burners.inlet: {loss_coefficient: 0.8}}\nflames:",
+            21,
+            "a loss needs the mean velocity",
+            "'velocity'"),
+        ring(
+            "flames:",
+            "two_ports: {burners.inlet: {loss_coefficient: -1, velocity: 57 m/s}}\nflames:",
+            21,
+            "out of range",
+            "zero or above"),
+        ring(
+            "flames:",
+            "two_ports: {burners.inlet: {loss_coefficient: 1, pressure_drop: 1 bar, velocity: 57 m/s}}\nflames:",
+            21,
+            "both 'loss_coefficient' and 'pressure_drop'",
+            "one of the two"),
+        ring(
+            "flames:",
+            "two_ports: {burners.inlet: {flow_from: plenum}}\nflames:",
+            21,
+            "joins nothing",
+            "'effective_length'"),
+        section(
+            "flames:",
+            "two_ports: {exit: {effective_length: 9 mm}}\nflames:",
+            32,
+            "not clear on which side",
+            "tubes, flame_tube"),
         // units and numbers
         ring("12 bar", "12", 13, "'12' has no unit", "12 bar"),
         ring("12 bar", "12 Bar", 13, "unknown unit 'Bar'", "'bar'"),

@@ -208,6 +208,6 @@ class ReadingCasesTest {
   void echoOfVariants_showsWhatDiffers() {
     CaseFile c = CaseReader.read(ShippedCasesTest.CASES.resolve("quiet-loud-quiet")).orThrow();
     assertThat(String.join("\n", c.echo()))
-        .containsPattern("variant hydrogen_60\\R +flames.main.response.gain +0.7 +");
+        .containsPattern("variant hydrogen_60\\R +flames.main.response.gain +0.8 +");
   }
 }
