@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.nio.file.Path;
+import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -35,10 +36,14 @@ class ShippedCasesTest {
     Flame flame = c.flames().get(0);
     assertThat(flame.heatRelease()).isEqualTo(15.5e6);
     assertThat(flame.reference()).isEqualTo(new Flame.EdgeFlux("burners.outlet", "burners"));
-    assertThat(flame.responseAt(3)).isEqualTo(new Flame.GainDelay(0.7, 1.7e-3));
+    assertThat(flame.responseAt(3)).isEqualTo(new Flame.GainDelay(0.7, 2.15e-3));
     assertThat(c.window().lowestFrequency()).isEqualTo(60);
     assertThat(c.window().lowestGrowth()).isEqualTo(-600);
-    assertThat(c.wall("chamber.downstream")).isEqualTo(new Wall.ChokedNozzle(0.12));
+    assertThat(c.wall("chamber.downstream")).isEqualTo(new Wall.Admittance(0.06, 0));
+    assertThat(c.twoPorts())
+        .containsExactly(
+            new TwoPort(
+                "burners.inlet", "plenum", OptionalDouble.of(0.9), OptionalDouble.empty(), 57, 0));
     assertThat(c.wall("burners.side")).isEqualTo(new Wall.Rigid());
   }
 
@@ -49,7 +54,7 @@ class ShippedCasesTest {
         .extracting(CaseFile.Variant::name)
         .containsExactly("hydrogen_30", "hydrogen_45", "hydrogen_60");
     CaseFile last = c.variants().get(2).caseFile();
-    assertThat(last.flames().get(0).responseAt(1)).isEqualTo(new Flame.GainDelay(0.7, 1.7e-3));
+    assertThat(last.flames().get(0).responseAt(1)).isEqualTo(new Flame.GainDelay(0.8, 1.7e-3));
     assertThat(last.geometry()).isEqualTo(c.geometry());
     assertThat(last.gas()).isEqualTo(c.gas());
     assertThat(last.window()).isEqualTo(c.window());
