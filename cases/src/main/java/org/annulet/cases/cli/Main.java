@@ -27,7 +27,7 @@ import picocli.CommandLine.UnmatchedArgumentException;
       "2 the input is at fault; 3 out of memory, disk or permission.",
       "A computed growth rate does not clear an engine to run."
     },
-    subcommands = {CheckVerb.class, MeshVerb.class, ModesVerb.class})
+    subcommands = {CheckVerb.class, MeshVerb.class, ModesVerb.class, VerifyVerb.class})
 public final class Main implements Runnable {
   @Spec private CommandSpec spec;
 
@@ -48,7 +48,7 @@ public final class Main implements Runnable {
   static ExitStatus run(Console console, String... args) {
     CommandLine line = new CommandLine(new Main());
     line.setCaseInsensitiveEnumValuesAllowed(false);
-    line.getSubcommands().values().forEach(s -> ((Verb) s.getCommand()).useConsole(console));
+    line.getSubcommands().values().forEach(s -> ((Speaker) s.getCommand()).useConsole(console));
     line.setParameterExceptionHandler((e, a) -> misuse(console, e));
     line.setExecutionExceptionHandler((e, c, r) -> failure(console, e).code());
     line.setOut(console.outWriter());

@@ -5,7 +5,6 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
-import java.util.concurrent.Callable;
 import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseReader;
@@ -17,8 +16,8 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.Parameters;
 
 /** What all verbs on a case share. */
-@Command(mixinStandardHelpOptions = true, versionProvider = Version.class)
-abstract class Verb implements Callable<Integer> {
+@Command
+abstract class Verb extends Speaker {
   @Parameters(
       index = "0",
       paramLabel = "CASE",
@@ -31,28 +30,12 @@ abstract class Verb implements Callable<Integer> {
       description = "folder for the results; default: 'out' beside the case file")
   private Path out;
 
-  @Option(names = "--quiet", description = "print faults only")
-  private boolean quiet;
-
-  private Console console;
-
-  void useConsole(Console console) {
-    this.console = console;
-  }
-
-  Console console() {
-    return console;
-  }
-
   @Override
   public Integer call() throws IOException {
-    if (quiet) {
-      console.beQuiet();
-    }
     try {
       Reading reading = CaseReader.read(casePath);
       CaseFile caseFile = reading.orThrow();
-      reading.cautions().forEach(c -> console.fault("note: " + c));
+      reading.cautions().forEach(c -> console().fault("note: " + c));
       return run(caseFile, folder()).code();
     } catch (CaseFaultException fault) {
       drawSpots(fault.problems());
@@ -77,7 +60,7 @@ abstract class Verb implements Callable<Integer> {
         Files.createDirectories(folder());
         Path file = folder().resolve(String.format(Locale.ROOT, "fault-%02d.svg", ++number));
         WholeFile.write(file, p.picture());
-        console.fault("picture of the spot: " + file);
+        console().fault("picture of the spot: " + file);
       }
     }
   }

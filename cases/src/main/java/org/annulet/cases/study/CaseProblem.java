@@ -41,7 +41,7 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
    *
    * @throws CaseFaultException if the case cannot be set up
    */
-  static CaseProblem on(CaseFile caseFile, ChamberShape shape) {
+  public static CaseProblem on(CaseFile caseFile, ChamberShape shape) {
     CaseGas gas = new CaseGas(caseFile);
     Medium medium = gas.on(shape.mesh());
     CaseFlames flames = new CaseFlames(caseFile);
