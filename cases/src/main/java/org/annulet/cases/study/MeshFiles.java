@@ -57,20 +57,45 @@ public final class MeshFiles {
     Files.createDirectories(folder);
     PlaneView view = PlaneView.of(GasVolume.kind(shape.geometry()));
     GmshWriter.write(mesh, folder.resolve("mesh.msh"));
-    int[] zone = new int[mesh.triangleCount()];
-    Surface flat = Surface.flat(mesh);
-    for (int t = 0; t < zone.length; t++) {
-      zone[t] = mesh.zone(flat.sourceTriangle(t));
-    }
-    new VtuFile(flat)
-        .field("zone_names", mesh.zoneNames())
-        .cells("zone", zone)
-        .write(folder.resolve("mesh.vtu"));
+    vtu(mesh).write(folder.resolve("mesh.vtu"));
     WholeFile.write(folder.resolve("mesh.svg"), MeshPicture.svg(mesh, view));
     WholeFile.write(
         folder.resolve("chamber.svg"),
         Svg.standalone(ChamberPicture.of(mesh, view, List.of()).svg()));
     WholeFile.write(folder.resolve("quality.txt"), report.toString());
     return report.toString().stripTrailing();
+  }
+
+  /** Triangles with the number of their zone, and lines with the number of their edge. */
+  private static VtuFile vtu(Mesh mesh) {
+    Surface flat = Surface.flat(mesh);
+    int[] corners = flat.triangles();
+    int triangles = mesh.triangleCount();
+    int[] lines = new int[2 * mesh.segmentCount()];
+    int[] zone = new int[triangles + mesh.segmentCount()];
+    int[] edge = new int[zone.length];
+    for (int t = 0; t < triangles; t++) {
+      zone[t] = mesh.zone(t);
+      edge[t] = -1;
+    }
+    for (int e = 0; e < mesh.segmentCount(); e++) {
+      int t = mesh.segmentLeft(e);
+      for (int k = 0; k < 3; k++) {
+        if (mesh.corner(t, k) == mesh.segmentStart(e)) {
+          lines[2 * e] = corners[3 * t + k];
+          lines[2 * e + 1] = corners[3 * t + (k + 1) % 3];
+        }
+      }
+      zone[triangles + e] = -1;
+      edge[triangles + e] = mesh.segmentEdge(e);
+    }
+    VtuFile file =
+        new VtuFile(flat, lines)
+            .field("zone_names", mesh.zoneNames())
+            .field("edge_names", mesh.edgeNames());
+    if (mesh.period() > 0) {
+      file.field("period", List.of(Double.toString(mesh.period())));
+    }
+    return file.cells("zone", zone).cells("edge", edge);
   }
 }

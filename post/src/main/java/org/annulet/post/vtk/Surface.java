@@ -201,7 +201,8 @@ public final class Surface {
     return points;
   }
 
-  int[] triangles() {
+  /** Points of the triangles, shape [triangles × 3]; not to be modified. */
+  public int[] triangles() {
     return triangles;
   }
 

@@ -7,6 +7,7 @@ import java.nio.ByteOrder;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.zip.Deflater;
 import org.annulet.post.files.WholeFile;
@@ -19,8 +20,10 @@ import org.annulet.post.files.WholeFile;
 public final class VtuFile {
   private static final int BLOCK = 1 << 20;
   private static final byte TRIANGLE_CELL = 5;
+  private static final byte LINE_CELL = 3;
 
   private final Surface surface;
+  private final int[] lines;
   private final StringBuilder fieldData = new StringBuilder();
   private final StringBuilder pointData = new StringBuilder();
   private final StringBuilder cellData = new StringBuilder();
@@ -29,7 +32,21 @@ public final class VtuFile {
 
   /** A file that shows fields on a surface. */
   public VtuFile(Surface surface) {
+    this(surface, new int[0]);
+  }
+
+  /**
+   * A file that shows fields on a surface and on lines, whose cells come after the triangles.
+   *
+   * @param lines numbers of the two points of each line, shape [lines × 2]
+   */
+  public VtuFile(Surface surface, int[] lines) {
     this.surface = surface;
+    this.lines = lines.clone();
+  }
+
+  private int cellCount() {
+    return surface.triangleCount() + lines.length / 2;
   }
 
   /** Adds a number that belongs to the whole file. */
@@ -73,23 +90,23 @@ public final class VtuFile {
   }
 
   /**
-   * Adds one whole number for each triangle.
+   * Adds one whole number for each triangle and line.
    *
-   * @param values shape [triangles of the surface]
+   * @param values shape [triangles of the surface + lines]
    */
   public VtuFile cells(String name, int[] values) {
-    check(name, values.length, surface.triangleCount());
+    check(name, values.length, cellCount());
     cellData.append(array("Int32", name, 1, bytes(values)));
     return this;
   }
 
   /**
-   * Adds numbers for each triangle.
+   * Adds numbers for each triangle and line.
    *
-   * @param values shape [triangles of the surface × components]
+   * @param values shape [(triangles of the surface + lines) × components]
    */
   public VtuFile cells(String name, double[] values, int components) {
-    check(name, values.length, surface.triangleCount() * components);
+    check(name, values.length, cellCount() * components);
     cellData.append(array("Float64", name, components, bytes(values)));
     return this;
   }
@@ -107,12 +124,15 @@ public final class VtuFile {
    * @throws IOException if the folder cannot be written
    */
   public void write(Path file) throws IOException {
-    int n = surface.triangleCount();
+    int n = cellCount();
+    int triangles = surface.triangleCount();
+    int[] corners = Arrays.copyOf(surface.triangles(), 3 * triangles + lines.length);
+    System.arraycopy(lines, 0, corners, 3 * triangles, lines.length);
     int[] offsets = new int[n];
     byte[] types = new byte[n];
     for (int t = 0; t < n; t++) {
-      offsets[t] = 3 * (t + 1);
-      types[t] = TRIANGLE_CELL;
+      offsets[t] = 3 * Math.min(t + 1, triangles) + 2 * Math.max(0, t + 1 - triangles);
+      types[t] = t < triangles ? TRIANGLE_CELL : LINE_CELL;
     }
     StringBuilder head = new StringBuilder(2000);
     head.append("<?xml version=\"1.0\"?>\n")
@@ -131,7 +151,7 @@ public final class VtuFile {
         .append("</CellData>\n<Points>\n")
         .append(array("Float64", "Points", 3, bytes(surface.points())))
         .append("</Points>\n<Cells>\n")
-        .append(array("Int32", "connectivity", 1, bytes(surface.triangles())))
+        .append(array("Int32", "connectivity", 1, bytes(corners)))
         .append(array("Int32", "offsets", 1, bytes(offsets)))
         .append(array("UInt8", "types", 1, types))
         .append("</Cells>\n</Piece>\n</UnstructuredGrid>\n")
