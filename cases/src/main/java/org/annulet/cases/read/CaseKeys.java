@@ -10,13 +10,17 @@ import java.util.Locale;
  */
 enum CaseKeys {
   CASE("annulet! title! about geometry! gas! walls two_ports flames window! outputs variants"),
-  RING("kind! burner_count! unrolled_radius mesh_size! mesh_size_at zones!"),
+  RING("kind! burner_count! unrolled_radius mesh_size! mesh_size_at sides_per_wavelength zones!"),
   ANNULUS("name! shape! mean_radius! gap! length!"),
   DUCTS("name! shape! mean_radius! bore area length!"),
-  SECTION("kind! mesh_size! mesh_size_at points_in points! edges! zones!"),
-  CROSS_SECTION("kind! mesh_size! mesh_size_at axial_wavenumber points_in points! edges! zones!"),
-  PLANE("kind! mesh_size! mesh_size_at depth! points_in points! edges! zones!"),
-  MESH_FILE("kind! file! plane! length_unit! depth axial_wavenumber separate_ducts"),
+  SECTION("kind! mesh_size! mesh_size_at sides_per_wavelength points_in points! edges! zones!"),
+  CROSS_SECTION(
+      "kind! mesh_size! mesh_size_at sides_per_wavelength axial_wavenumber points_in points! edges! zones!"),
+  PLANE(
+      "kind! mesh_size! mesh_size_at sides_per_wavelength depth! points_in points! edges! zones!"),
+  MESH_FILE(
+      "kind! file! plane! length_unit! coordinates zone_names edge_names depth axial_wavenumber"
+          + " separate_ducts"),
   MESH_FILE_DUCTS("count! open_share!"),
   EDGE("line arc curve"),
   OUTLINE_ZONE("boundary! holes separate_ducts open_share"),

@@ -4,6 +4,9 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
+import java.util.TreeSet;
+import org.annulet.mesher.mesh.Mesh;
 
 /**
  * Names walls, flames and references may use.
@@ -36,7 +39,7 @@ record EdgeNames(List<String> walls, Map<String, List<String>> inner) {
     return new Geometry.Annulus(name, Double.NaN, Double.NaN, Double.NaN);
   }
 
-  /** Names of a geometry; none for a mesh file, which is not yet read. */
+  /** Names of a geometry; none for a mesh file that could not be read. */
   static EdgeNames of(Geometry geometry) {
     if (geometry instanceof Geometry.Ring ring) {
       return ofRing(ring);
@@ -50,7 +53,39 @@ record EdgeNames(List<String> walls, Map<String, List<String>> inner) {
     if (geometry instanceof Geometry.Plane p) {
       return ofOutline(p.outline());
     }
+    if (geometry instanceof Geometry.MeshFile f && f.mesh() != null) {
+      return ofMesh(f.mesh());
+    }
     return new EdgeNames(List.of(), Map.of());
+  }
+
+  /** An edge with gas on both sides anywhere is an inner edge. */
+  private static EdgeNames ofMesh(Mesh mesh) {
+    Map<String, Set<String>> beside = new LinkedHashMap<>();
+    Set<String> inside = new TreeSet<>();
+    mesh.edgeNames().forEach(e -> beside.put(e, new TreeSet<>()));
+    for (int e = 0; e < mesh.segmentCount(); e++) {
+      String name = mesh.edgeNames().get(mesh.segmentEdge(e));
+      for (int t : new int[] {mesh.segmentLeft(e), mesh.segmentRight(e)}) {
+        if (t >= 0) {
+          beside.get(name).add(mesh.zoneNames().get(mesh.zone(t)));
+        }
+      }
+      if (mesh.segmentLeft(e) >= 0 && mesh.segmentRight(e) >= 0) {
+        inside.add(name);
+      }
+    }
+    List<String> walls = new ArrayList<>();
+    Map<String, List<String>> inner = new LinkedHashMap<>();
+    beside.forEach(
+        (name, zones) -> {
+          if (!inside.contains(name)) {
+            walls.add(name);
+          } else if (zones.size() == 2) {
+            inner.put(name, List.copyOf(zones));
+          }
+        });
+    return new EdgeNames(walls, inner);
   }
 
   private static EdgeNames ofRing(Geometry.Ring ring) {

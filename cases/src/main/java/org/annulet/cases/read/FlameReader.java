@@ -196,7 +196,7 @@ final class FlameReader {
   private Optional<Stretch> stretch(Mapping m) {
     Entry zoneEntry = m.get("zone").orElseThrow();
     Optional<String> zone =
-        geometry instanceof Geometry.MeshFile
+        geometry instanceof Geometry.MeshFile && geometry.zoneNames().isEmpty()
             ? zoneEntry.text()
             : zoneEntry.nameOf("zone", geometry.zoneNames());
     boolean ring = geometry instanceof Geometry.Ring;

@@ -3,13 +3,14 @@ package org.annulet.cases.read;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import org.annulet.mesher.mesh.Mesh;
 
 /** The shape of the gas. Lengths in m. */
 public sealed interface Geometry {
   /** Sizes of triangles. */
   MeshSize meshSize();
 
-  /** Names of the zones, in the order of the file; empty for a mesh file, which is read later. */
+  /** Names of the zones, in the order of the file. */
   List<String> zoneNames();
 
   /**
@@ -17,8 +18,10 @@ public sealed interface Geometry {
    *
    * @param largest everywhere, in m
    * @param local by edge or zone name, in m; in the order of the file
+   * @param sidesPerWavelength least number of sides per wavelength at the top of the window; 0 for
+   *     no such rule
    */
-  record MeshSize(double largest, Map<String, Double> local) {}
+  record MeshSize(double largest, Map<String, Double> local, double sidesPerWavelength) {}
 
   /**
    * Thin annuli, unrolled: N burners on one ring. Axial coordinate x is 0 at the upstream end of
@@ -146,22 +149,24 @@ public sealed interface Geometry {
    * @param plane what the coordinates mean
    * @param depth of a plane in m; axial wavenumber in 1/m of a cross-section; 0 on a section
    * @param separateDucts number of identical tubes and open share by zone name
+   * @param mesh as read from the file, in m
    */
   record MeshFile(
       Path file,
       double metresPerUnit,
       MeshPlane plane,
       double depth,
-      Map<String, SeparateDucts> separateDucts)
+      Map<String, SeparateDucts> separateDucts,
+      Mesh mesh)
       implements Geometry {
     @Override
     public MeshSize meshSize() {
-      return new MeshSize(Double.POSITIVE_INFINITY, Map.of());
+      return new MeshSize(Double.POSITIVE_INFINITY, Map.of(), 0);
     }
 
     @Override
     public List<String> zoneNames() {
-      return List.of();
+      return mesh == null ? List.of() : mesh.zoneNames();
     }
   }
 

@@ -1,15 +1,11 @@
 package org.annulet.cases.read;
 
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import org.annulet.cases.units.Quantity;
 import org.annulet.cases.units.QuantityKind;
-import org.annulet.cases.units.UnitFault;
 
 /** Reads {@code geometry}. */
 final class GeometryReader {
@@ -57,7 +53,7 @@ final class GeometryReader {
         double depth = m.number("depth", QuantityKind.LENGTH, Range.POSITIVE);
         yield new Geometry.Plane(outline, sizes(m, OutlineReader.sizedNames(outline)), depth);
       }
-      default -> meshFile(Mapping.of(entry, CaseKeys.MESH_FILE));
+      default -> MeshFileReader.read(Mapping.of(entry, CaseKeys.MESH_FILE));
     };
   }
 
@@ -109,7 +105,8 @@ final class GeometryReader {
                         local.put(name, size.number(QuantityKind.LENGTH, Range.POSITIVE));
                       });
             });
-    return new Geometry.MeshSize(largest, local);
+    double sides = m.number("sides_per_wavelength", QuantityKind.FRACTION, Range.POSITIVE, 0);
+    return new Geometry.MeshSize(largest, local, sides);
   }
 
   private static Geometry ring(Mapping m) {
@@ -133,7 +130,7 @@ final class GeometryReader {
     double radius = m.number("unrolled_radius", QuantityKind.LENGTH, Range.POSITIVE, last);
     Geometry.Ring bare =
         new Geometry.Ring(
-            count, radius, List.copyOf(zones), new Geometry.MeshSize(Double.NaN, Map.of()));
+            count, radius, List.copyOf(zones), new Geometry.MeshSize(Double.NaN, Map.of(), 0));
     List<String> names = new ArrayList<>(bare.zoneNames());
     EdgeNames edges = EdgeNames.of(bare);
     names.addAll(edges.all());
@@ -192,54 +189,10 @@ final class GeometryReader {
         : Math.sqrt(4 / Math.PI * z.number("area", QuantityKind.AREA, Range.POSITIVE));
   }
 
-  private static Geometry meshFile(Mapping m) {
-    Optional<Path> file = m.get("file").flatMap(CaseFolder::existing);
-    Geometry.MeshPlane plane =
-        m.get("plane")
-            .flatMap(e -> e.choice(List.of("section", "cross_section", "plane")))
-            .map(p -> Geometry.MeshPlane.valueOf(p.toUpperCase(Locale.ROOT)))
-            .orElse(Geometry.MeshPlane.SECTION);
-    double unit = m.get("length_unit").map(GeometryReader::unit).orElse(Double.NaN);
-    double depth = 0;
-    if (plane == Geometry.MeshPlane.PLANE) {
-      if (!m.has("depth")) {
-        m.entry().fault("the key 'depth' is missing", "a plane has a depth: add 'depth: 50 mm'");
-      }
-      depth = m.number("depth", QuantityKind.LENGTH, Range.POSITIVE);
-    } else if (plane == Geometry.MeshPlane.CROSS_SECTION) {
-      depth = m.number("axial_wavenumber", QuantityKind.WAVENUMBER, Range.NOT_NEGATIVE, 0);
-    }
-    Map<String, Geometry.SeparateDucts> ducts = new LinkedHashMap<>();
-    m.get("separate_ducts")
-        .ifPresent(
-            e ->
-                Mapping.named(e)
-                    .entries()
-                    .forEach(
-                        (name, d) -> {
-                          Mapping z = Mapping.of(d, CaseKeys.MESH_FILE_DUCTS);
-                          ducts.put(name, ducts(z, "count"));
-                        }));
-    return new Geometry.MeshFile(file.orElse(null), unit, plane, depth, ducts);
-  }
-
   /** Number of tubes and open share of a zone of separate ducts. */
   static Geometry.SeparateDucts ducts(Mapping z, String countKey) {
     int n = z.get(countKey).map(e -> e.whole(1, MOST_BURNERS)).orElse(0);
     return new Geometry.SeparateDucts(
         n, z.number("open_share", QuantityKind.FRACTION, Range.SHARE));
-  }
-
-  private static double unit(Entry e) {
-    Optional<String> text = e.text();
-    if (text.isEmpty()) {
-      return Double.NaN;
-    }
-    try {
-      return Quantity.parse("1", text.get(), QuantityKind.LENGTH).si();
-    } catch (UnitFault f) {
-      e.fault(f.what(), f.mend());
-      return Double.NaN;
-    }
   }
 }

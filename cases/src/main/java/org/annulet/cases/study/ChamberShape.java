@@ -24,6 +24,7 @@ import org.annulet.solver.assembly.CrossSection;
 import org.annulet.solver.assembly.Plane;
 import org.annulet.solver.assembly.Ring;
 import org.annulet.solver.assembly.Section;
+import org.annulet.solver.medium.Medium;
 
 /**
  * The shape of a case as mesh and as the solver's geometry.
@@ -34,10 +35,13 @@ import org.annulet.solver.assembly.Section;
  */
 public record ChamberShape(
     Mesh mesh, Optional<RingCells> cells, org.annulet.solver.assembly.Geometry geometry) {
+  /** Most nodes of a refined mesh made elsewhere; about what 16 GB carry. */
+  private static final long MOST_NODES = 4_000_000;
 
   /**
    * Nested meshes of a case, from coarse to fine: each is the one before with every triangle cut
-   * into four, new boundary nodes on the true curves.
+   * into four, new boundary nodes on the true curves. A mesh made elsewhere is the coarsest; its
+   * boundary stays the polygon it is.
    *
    * @param levels how many, at least 1
    * @param scale factor on all sizes of triangles of the finest: 1 for the mesh the case asks for
@@ -47,7 +51,11 @@ public record ChamberShape(
     List<ChamberShape> ladder = new ArrayList<>();
     try {
       EdgeCurves curves = curves(caseFile);
-      ladder.add(mesh(caseFile, scale * (1 << (levels - 1))));
+      if (caseFile.geometry() instanceof Geometry.MeshFile file) {
+        ladder.add(imported(caseFile, file, levels));
+      } else {
+        ladder.add(mesh(caseFile, scale * (1 << (levels - 1))));
+      }
       for (int i = 1; i < levels; i++) {
         ladder.add(ladder.get(i - 1).refined(curves));
       }
@@ -95,7 +103,31 @@ public record ChamberShape(
 
   private static ChamberShape mesh(CaseFile caseFile, double scale) {
     Geometry g = caseFile.geometry();
-    Sizing sizing = sizing(g.meshSize(), g.zoneNames()).scaled(scale);
+    Sizing sizing = sizing(g.meshSize(), g.zoneNames());
+    if (g.meshSize().sidesPerWavelength() > 0) {
+      Sizing.Builder b = sizing.toBuilder();
+      perWavelength(caseFile, shape(g, sizing.scaled(4)).mesh())
+          .forEach((zone, h) -> b.zone(zone, Math.min(h, sizing.zones().getOrDefault(zone, h))));
+      return shape(g, b.build().scaled(scale));
+    }
+    return shape(g, sizing.scaled(scale));
+  }
+
+  /** Largest sides that leave the wanted number per wavelength in the slowest gas of each zone. */
+  private static Map<String, Double> perWavelength(CaseFile caseFile, Mesh coarse) {
+    Medium gas = new CaseGas(caseFile).on(coarse);
+    double sides = caseFile.geometry().meshSize().sidesPerWavelength();
+    Map<String, Double> largest = new LinkedHashMap<>();
+    for (int t = 0; t < coarse.triangleCount(); t++) {
+      largest.merge(
+          coarse.zoneNames().get(coarse.zone(t)),
+          gas.soundSpeed(t) / (sides * caseFile.window().highestFrequency()),
+          Math::min);
+    }
+    return largest;
+  }
+
+  private static ChamberShape shape(Geometry g, Sizing sizing) {
     if (g instanceof Geometry.Ring ring) {
       RingCells cells = RingMesher.mesh(DrawnShape.ring(ring), sizing);
       return new ChamberShape(cells.whole(), Optional.of(cells), ringGeometry(ring));
@@ -118,14 +150,37 @@ public record ChamberShape(
     if (g instanceof Geometry.Plane plane) {
       return flat(plane.outline(), sizing, new Plane(plane.depth()));
     }
-    throw new CaseFaultException(
-        List.of(
-            caseFile
-                .source()
-                .problem(
-                    "geometry.kind",
-                    "a mesh made elsewhere cannot be solved in this version",
-                    "draw the outline in the case file")));
+    throw new IllegalArgumentException("no outline to mesh in " + g);
+  }
+
+  private static ChamberShape imported(CaseFile caseFile, Geometry.MeshFile file, int levels) {
+    long nodes = (long) file.mesh().nodeCount() << (2 * (levels - 1));
+    if (nodes > MOST_NODES) {
+      throw new CaseFaultException(
+          List.of(
+              caseFile
+                  .source()
+                  .problem(
+                      "geometry.file",
+                      "the mesh has "
+                          + file.mesh().nodeCount()
+                          + " nodes, and "
+                          + nodes
+                          + " where it is refined for the error bars",
+                      "write a coarser mesh: it is the coarsest of " + levels + " nested ones")));
+    }
+    org.annulet.solver.assembly.Geometry geometry =
+        switch (file.plane()) {
+          case SECTION -> {
+            Map<String, Section.Ducts> ducts = new LinkedHashMap<>();
+            file.separateDucts()
+                .forEach((name, d) -> ducts.put(name, new Section.Ducts(d.count(), d.openShare())));
+            yield new Section(0, ducts);
+          }
+          case CROSS_SECTION -> new CrossSection(file.depth());
+          case PLANE -> new Plane(file.depth());
+        };
+    return new ChamberShape(file.mesh(), Optional.empty(), geometry);
   }
 
   private static ChamberShape flat(

@@ -34,7 +34,8 @@ class EdgeNamesTest {
   @ParameterizedTest
   @MethodSource("rings")
   void namesOfReaderAndMesher_agree(List<Geometry.RingZone> zones) {
-    Geometry.Ring ring = new Geometry.Ring(10, 0.3, zones, new Geometry.MeshSize(0.05, Map.of()));
+    Geometry.Ring ring =
+        new Geometry.Ring(10, 0.3, zones, new Geometry.MeshSize(0.05, Map.of(), 0));
     EdgeNames names = EdgeNames.of(ring);
     Mesh mesh = RingMesher.mesh(DrawnShape.ring(ring), Sizing.builder(0.05).build()).whole();
     Set<String> read = new TreeSet<>(names.all());

@@ -8,6 +8,8 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import org.annulet.mesher.files.GmshWriter;
+import org.annulet.mesher.mesh.Mesh;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -166,7 +168,25 @@ class ReadingCasesTest {
         .singleElement()
         .satisfies(p -> assertThat(p.what()).contains("'mesh.msh' does not exist"));
     Files.writeString(folder.resolve("mesh.msh"), "");
+    assertThat(CaseReader.read(file).problems().get(0).toString())
+        .contains("case.yaml:3:")
+        .contains("mesh.msh: no MSH file: it does not begin with $MeshFormat")
+        .contains("mend: name an MSH file");
+    Mesh.Builder b = Mesh.builder();
+    b.node(0, 300);
+    b.node(100, 300);
+    b.node(0, 400);
+    b.triangle(0, 1, 2, "burners");
+    b.segment(0, 1, "hub").segment(1, 2, "shell").segment(2, 0, "head");
+    GmshWriter.write(b.build(), folder.resolve("mesh.msh"));
+    assertThat(CaseReader.read(file).problems().toString())
+        .contains("case.yaml:5:")
+        .contains("no zone 'air'")
+        .contains("no gas in zone 'burners'");
+    Files.writeString(file, text.replace("air: {temp", "burners: {temp"));
     Geometry.MeshFile mesh = (Geometry.MeshFile) CaseReader.read(folder).orThrow().geometry();
+    assertThat(mesh.zoneNames()).containsExactly("burners");
+    assertThat(mesh.mesh().y(2)).isEqualTo(0.4);
     assertThat(mesh.metresPerUnit()).isEqualTo(0.001);
     assertThat(mesh.file()).isEqualTo(folder.toAbsolutePath().resolve("mesh.msh"));
     assertThat(mesh.separateDucts().get("burners")).isEqualTo(new Geometry.SeparateDucts(14, 0.25));

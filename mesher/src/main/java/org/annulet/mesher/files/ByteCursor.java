@@ -29,6 +29,7 @@ final class ByteCursor {
     if (size > limit) {
       throw new MeshFileException(
           path.toString(),
+          "",
           "the file has " + size + " bytes, " + limit + " can be read",
           "give the Java virtual machine more memory (-Xmx), or write a coarser mesh");
     }
@@ -52,7 +53,7 @@ final class ByteCursor {
   }
 
   MeshFileException faultAt(int position, String what, String mend) {
-    return new MeshFileException(file + " " + place(position), what, mend);
+    return new MeshFileException(file, bytes.length == 0 ? "" : " " + place(position), what, mend);
   }
 
   /** Line where the text is text, byte always. */

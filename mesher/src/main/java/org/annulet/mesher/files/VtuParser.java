@@ -60,7 +60,7 @@ final class VtuParser {
   }
 
   MeshFileException fault(String what, String mend) {
-    return new MeshFileException(name, what, mend);
+    return new MeshFileException(name, "", what, mend);
   }
 
   private Element root() throws IOException {
@@ -101,7 +101,7 @@ final class VtuParser {
       document = builder.parse(new ByteArrayInputStream(head));
     } catch (SAXParseException e) {
       throw new MeshFileException(
-          name + " line " + e.getLineNumber(), "no XML: " + e.getMessage(), ByteCursor.WRITE_AGAIN);
+          name, " line " + e.getLineNumber(), "no XML: " + e.getMessage(), ByteCursor.WRITE_AGAIN);
     } catch (SAXException | ParserConfigurationException e) {
       throw fault("no XML: " + e.getMessage(), ByteCursor.WRITE_AGAIN);
     }

@@ -1,9 +1,7 @@
 package org.annulet.mesher.mesh;
 
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
-import java.util.Locale;
 import org.annulet.mesher.mesh.MeshCheck.Finding;
 import org.annulet.mesher.mesh.MeshCheck.Law;
 import org.annulet.mesher.mesh.MeshMeasures.Sum;
@@ -48,8 +46,8 @@ final class BoundaryLaws {
     }
     angleSums(onBoundary);
     contacts();
-    if (loopsAreSimple()) {
-      loops();
+    if (findings.stream().noneMatch(f -> f.law() == Law.NAMED_BOUNDARY)) {
+      new BoundaryLoops(mesh, sides, findings).check();
     }
     divergence();
   }
@@ -159,122 +157,6 @@ final class BoundaryLaws {
     double dy = mesh.y(mesh.segmentEnd(e)) - mesh.y(mesh.segmentStart(e));
     double period = mesh.period();
     return period == 0 ? dy : dy - period * Math.rint(dy / period);
-  }
-
-  private boolean loopsAreSimple() {
-    int[] balance = new int[mesh.nodeCount()];
-    for (int e : boundary) {
-      balance[mesh.segmentStart(e)] += 1;
-      balance[mesh.segmentEnd(e)] += 1 << 16;
-    }
-    boolean simple = true;
-    for (int v = 0; v < balance.length; v++) {
-      if (balance[v] != 0 && balance[v] != (1 << 16) + 1) {
-        simple = false;
-        findings.add(at(Law.CLOSED_LOOPS, "the boundary touches itself in node " + v, v));
-      }
-    }
-    return simple;
-  }
-
-  private void loops() {
-    int[] component = components();
-    int parts = Arrays.stream(component).max().orElse(-1) + 1;
-    int[] euler = new int[parts];
-    for (int c : component) {
-      euler[c]++;
-    }
-    for (int s = 0; s < sides.count(); s++) {
-      euler[component[sides.lowNode(s)]]--;
-    }
-    for (int t = 0; t < mesh.triangleCount(); t++) {
-      euler[component[mesh.corner(t, 0)]]++;
-    }
-    int[] loops = new int[parts];
-    int[] outer = new int[parts];
-    int[] winding = new int[parts];
-    for (int[] loop : followLoops()) {
-      int c = component[mesh.segmentStart(loop[0])];
-      loops[c]++;
-      double area = 0;
-      double climb = 0;
-      double x0 = mesh.x(mesh.segmentStart(loop[0]));
-      for (int e : loop) {
-        double mean = 0.5 * (mesh.x(mesh.segmentStart(e)) + mesh.x(mesh.segmentEnd(e)));
-        area += (mean - x0) * rise(e);
-        climb += rise(e);
-      }
-      if (mesh.period() != 0 && Math.abs(climb) > 0.5 * mesh.period()) {
-        winding[c]++;
-      } else if (area > 0) {
-        outer[c]++;
-      }
-    }
-    for (int c = 0; c < parts; c++) {
-      boolean one = winding[c] == 0 ? outer[c] == 1 : winding[c] == 2 && outer[c] == 0;
-      if (loops[c] != 2 - euler[c] || !one) {
-        String what =
-            String.format(
-                Locale.ROOT,
-                "part %d of the mesh has %d boundary loops where Euler's formula wants %d; %d of"
-                    + " them enclose it, %d go round the ring",
-                c,
-                loops[c],
-                2 - euler[c],
-                outer[c],
-                winding[c]);
-        findings.add(Finding.ofWhole(Law.CLOSED_LOOPS, what));
-      }
-    }
-  }
-
-  private int[] components() {
-    int[] root = new int[mesh.nodeCount()];
-    for (int v = 0; v < root.length; v++) {
-      root[v] = v;
-    }
-    for (int s = 0; s < sides.count(); s++) {
-      int a = find(root, sides.lowNode(s));
-      int b = find(root, sides.highNode(s));
-      root[Math.max(a, b)] = Math.min(a, b);
-    }
-    int[] number = new int[root.length];
-    int parts = 0;
-    for (int v = 0; v < root.length; v++) {
-      int r = find(root, v);
-      number[v] = r == v ? parts++ : number[r];
-    }
-    return number;
-  }
-
-  private static int find(int[] root, int v) {
-    int r = v;
-    while (root[r] != r) {
-      root[r] = root[root[r]];
-      r = root[r];
-    }
-    return r;
-  }
-
-  private List<int[]> followLoops() {
-    int[] from = new int[mesh.nodeCount()];
-    Arrays.fill(from, -1);
-    for (int e : boundary) {
-      from[mesh.segmentStart(e)] = e;
-    }
-    List<int[]> loops = new ArrayList<>();
-    int[] path = new int[boundary.length];
-    for (int first : boundary) {
-      int length = 0;
-      for (int e = from[mesh.segmentStart(first)]; e >= 0; e = from[mesh.segmentEnd(e)]) {
-        from[mesh.segmentStart(e)] = -1;
-        path[length++] = e;
-      }
-      if (length > 0) {
-        loops.add(Arrays.copyOf(path, length));
-      }
-    }
-    return loops;
   }
 
   /** ∮ x n_x ds = area, with n ds = (dy, −dx) to the right of each segment. */

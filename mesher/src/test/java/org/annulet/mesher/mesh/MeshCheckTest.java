@@ -82,7 +82,7 @@ class MeshCheckTest {
   }
 
   @Test
-  void boundaryThatTouchesItselfInANode_isFound() {
+  void partsThatMeetInANodeAlone_areFound() {
     Mesh.Builder b = Mesh.builder();
     b.node(0, 0);
     b.node(1, 0);
@@ -94,6 +94,36 @@ class MeshCheckTest {
     b.segment(0, 1, "w").segment(1, 2, "w").segment(2, 0, "w");
     b.segment(0, 3, "w").segment(3, 4, "w").segment(4, 0, "w");
     assertThat(laws(b.build())).contains(Law.CLOSED_LOOPS);
+  }
+
+  /** A frame of eight squares round a hole that touches the outer boundary in a corner: sound. */
+  @Test
+  void boundaryThatPassesANodeTwice_isSound_butAMissingLoopIsNot() {
+    Mesh.Builder b = Mesh.builder();
+    // two triangles that share node 0 and are joined round it by the triangles of the other side
+    int[] v = new int[8];
+    double[][] p = {{0, 0}, {2, -1}, {2, 1}, {0, 2}, {-2, 1}, {-2, -1}, {-1, 3}, {1, 3}};
+    for (int k = 0; k < v.length; k++) {
+      v[k] = b.node(p[k][0], p[k][1]);
+    }
+    // right fan at 0: (0,1,2); left fan: (0,4,5); joined over the top, a hole between 0, 2, 3, 4
+    b.triangle(v[0], v[1], v[2], "z");
+    b.triangle(v[0], v[4], v[5], "z");
+    b.triangle(v[2], v[7], v[3], "z");
+    b.triangle(v[3], v[7], v[6], "z");
+    b.triangle(v[3], v[6], v[4], "z");
+    int far = b.node(3, 2);
+    int wide = b.node(-3, 2);
+    b.triangle(v[1], far, v[2], "z");
+    b.triangle(v[2], far, v[7], "z");
+    b.triangle(v[4], wide, v[5], "z");
+    b.triangle(v[6], wide, v[4], "z");
+    b.segment(v[0], v[1], "out").segment(v[1], far, "out").segment(far, v[7], "out");
+    b.segment(v[7], v[6], "out").segment(v[6], wide, "out").segment(wide, v[5], "out");
+    b.segment(v[5], v[0], "out");
+    b.segment(v[0], v[4], "in").segment(v[4], v[3], "in").segment(v[3], v[2], "in");
+    b.segment(v[2], v[0], "in");
+    assertThat(MeshCheck.of(b.build())).isEmpty();
   }
 
   @Test
