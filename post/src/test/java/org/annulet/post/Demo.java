@@ -11,6 +11,7 @@ import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
 import org.annulet.post.meaning.ModeView;
+import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.modes.Window;
@@ -76,7 +77,14 @@ public final class Demo {
                   new GrowthBudget.Item("wall chamber.nozzle", -10, 0)),
               g,
               0);
-      modes.add(new ModeEntry(views.get(i), labels.get(i), Optional.of(budget)));
+      modes.add(
+          new ModeEntry(views.get(i), labels.get(i), Optional.of(budget))
+              .with(
+                  List.of(
+                      new ParameterSensitivity(
+                          "flames.<1>.response.delay", "2.1 ms", 0.1 * (i + 1), -0.02, 3.5),
+                      new ParameterSensitivity(
+                          "gas.zones.chamber.temperature", "1850 K", -0.05, 1.2, 250))));
     }
     results =
         new Results(

@@ -7,7 +7,9 @@ import java.util.HashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
+import java.util.function.Function;
 import org.annulet.cases.units.Quantity;
 import org.annulet.cases.units.QuantityKind;
 
@@ -73,8 +75,14 @@ final class Binder {
     return sorted(cautions);
   }
 
+  /** What was read; cannot be read again with other values. */
   CaseSource source() {
-    return new CaseSource(file, places, values);
+    return source(changes -> new Reading(Optional.empty(), List.of(), List.of()));
+  }
+
+  /** What was read, and how to read it again with some values replaced. */
+  CaseSource source(Function<Map<String, String>, Reading> again) {
+    return new CaseSource(file, places, values, again);
   }
 
   private static List<Problem> sorted(Set<Problem> all) {

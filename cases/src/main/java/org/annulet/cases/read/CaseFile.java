@@ -58,6 +58,15 @@ public record CaseFile(
     return walls.getOrDefault(edge, new Wall.Rigid());
   }
 
+  /**
+   * The same case with some values replaced, without variants; the file itself is not read again.
+   *
+   * @param changes new text by key path, as in {@code flames.main.response.delay} → {@code 2.1 ms}
+   */
+  public Reading with(Map<String, String> changes) {
+    return source.again().apply(changes);
+  }
+
   /** What was understood, line by line, every dimensional value in SI beside its source text. */
   public List<String> echo() {
     return CaseEcho.lines(this);

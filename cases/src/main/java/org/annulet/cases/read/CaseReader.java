@@ -83,7 +83,11 @@ public final class CaseReader {
     if (changes.isEmpty()) {
       return bind(root.get(), binder);
     }
-    Node tree = without(root.get(), "variants");
+    return changed(root.get(), changes, binder);
+  }
+
+  private Reading changed(Node root, Map<String, String> changes, Binder binder) {
+    Node tree = without(root, "variants");
     for (Map.Entry<String, String> change : changes.entrySet()) {
       Optional<Node> value =
           new Compose(LoadSettings.builder().setLabel(shown).build())
@@ -163,7 +167,7 @@ public final class CaseReader {
                 window.orElseThrow().orders(),
                 outputs,
                 variants,
-                binder.source());
+                binder.source(changes -> changed(root, changes, binder())));
     List<CaseFile.Variant> variants =
         m.get("variants").map(e -> variants(e, root, problems, cautions)).orElse(List.of());
     return problems.isEmpty() && clean

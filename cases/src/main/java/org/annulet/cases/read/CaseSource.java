@@ -2,6 +2,7 @@ package org.annulet.cases.read;
 
 import java.util.List;
 import java.util.Map;
+import java.util.function.Function;
 import org.annulet.cases.units.QuantityKind;
 
 /**
@@ -10,8 +11,13 @@ import org.annulet.cases.units.QuantityKind;
  * @param file file name as the user knows it
  * @param places line and column by key path, as in {@code walls.chamber.downstream}
  * @param values every dimensional value read, in the order of reading
+ * @param again reads the same text once more with some values replaced: new text by key path
  */
-public record CaseSource(String file, Map<String, Place> places, List<Value> values) {
+public record CaseSource(
+    String file,
+    Map<String, Place> places,
+    List<Value> values,
+    Function<Map<String, String>, Reading> again) {
   /** Copies the collections. */
   public CaseSource {
     places = Map.copyOf(places);

@@ -22,6 +22,7 @@ import org.annulet.post.report.HtmlReport;
 import org.annulet.post.report.ReportInput;
 import org.annulet.post.table.ModesCsv;
 import org.annulet.post.table.ModesJson;
+import org.annulet.post.table.SensitivitiesCsv;
 import org.annulet.post.table.TextTables;
 import org.annulet.post.vtk.ModeFiles;
 import org.annulet.post.vtk.Surface;
@@ -46,14 +47,14 @@ public final class ModesFiles {
     removeOldFields(folder);
     ModesJson.write(folder.resolve("modes.json"), answer.results());
     ModesCsv.write(folder.resolve("modes.csv"), answer.results());
+    SensitivitiesCsv.write(folder.resolve("sensitivities.csv"), answer.results());
     WholeFile.write(folder.resolve("modes.md"), TextTables.markdown(answer.results()));
     WholeFile.write(
         folder.resolve("spectrum.svg"),
         Svg.standalone(SpectrumChart.svg(answer.results(), CHART_WIDTH, CHART_HEIGHT)));
     HtmlReport.write(
         folder.resolve("report.html"),
-        new ReportInput(
-            answer.results(), answer.chamber(), facts(answer.caseFile()), List.of(), List.of()));
+        new ReportInput(answer.results(), answer.chamber(), facts(answer.caseFile()), List.of()));
     int most = answer.caseFile().outputs().fieldFiles();
     List<ModeView> all = answer.results().modes().stream().map(ModeEntry::view).toList();
     List<ModeView> views =

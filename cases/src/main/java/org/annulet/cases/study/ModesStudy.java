@@ -1,9 +1,13 @@
 package org.annulet.cases.study;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.Comparator;
+import java.util.IdentityHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.stream.IntStream;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.mesher.mesh.Mesh;
@@ -14,11 +18,13 @@ import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
 import org.annulet.post.meaning.ModeView;
+import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.assembly.AssembledProblem;
 import org.annulet.solver.assembly.NodalField;
 import org.annulet.solver.assembly.Ring;
 import org.annulet.solver.eigen.ModeSearch;
+import org.annulet.solver.eigen.PreparedOperator;
 import org.annulet.solver.eigen.SearchSettings;
 import org.annulet.solver.modes.MeshError;
 import org.annulet.solver.modes.Mode;
@@ -64,10 +70,10 @@ public final class ModesStudy {
     CaseProblem problem = ladder.get(LEVELS - 1);
     Found found = search(ladder);
     Chamber chamber = GasVolume.of(problem);
-    List<ModeEntry> inside = label(chamber, found.inside);
-    List<ModeEntry> outside = label(chamber, found.outside);
     List<String> notes = new ArrayList<>();
     notes.add(problem.method());
+    List<ModeEntry> inside = withSensitivities(label(chamber, found.inside), found, problem, notes);
+    List<ModeEntry> outside = label(chamber, found.outside);
     if (problem.shape().geometry() instanceof Ring ring) {
       ThinGap.sentence(ring, inside, chamber.mesh().zoneNames()).ifPresent(notes::add);
     }
@@ -86,16 +92,60 @@ public final class ModesStudy {
   /** An entry of the results, and the mode of the operator behind it. */
   private record Listed(ModeView view, CaseProblem.Part part, Mode own) {}
 
+  private List<ModeEntry> withSensitivities(
+      List<ModeEntry> entries, Found found, CaseProblem problem, List<String> notes) {
+    progress.step("sensitivities", 0, 1);
+    Sensitivities study = new Sensitivities(caseFile, problem);
+    Set<Mode> seen = Collections.newSetFromMap(new IdentityHashMap<>());
+    for (Listed l : found.inside) {
+      if (!seen.contains(l.own)) {
+        List<Mode> members = members(l, found.inside);
+        seen.addAll(members);
+        int part = problem.parts().indexOf(l.part);
+        study.add(part, found.prepared.get(part), members);
+      }
+    }
+    Map<Mode, List<ParameterSensitivity>> tables = study.run();
+    if (!study.leftOut().isEmpty()) {
+      notes.add(
+          "Sensitivities leave out what cannot be varied by itself on the same mesh: "
+              + String.join(", ", study.leftOut())
+              + ".");
+    }
+    List<ModeEntry> out = new ArrayList<>();
+    for (int i = 0; i < entries.size(); i++) {
+      out.add(entries.get(i).with(tables.getOrDefault(found.inside.get(i).own, List.of())));
+    }
+    return out;
+  }
+
+  /** The modes of one eigenvalue of one operator. */
+  private static List<Mode> members(Listed mode, List<Listed> all) {
+    List<Mode> members = new ArrayList<>();
+    for (Listed o : all) {
+      if (o.part == mode.part
+          && !members.contains(o.own)
+          && (o.own == mode.own
+              || mode.own.multiplicity() > 1
+                  && o.own.multiplicity() > 1
+                  && together(o.own, mode.own))) {
+        members.add(o.own);
+      }
+    }
+    return members;
+  }
+
   private static final class Found {
     final List<Certificate> certificates = new ArrayList<>();
     final List<Listed> inside = new ArrayList<>();
     final List<Listed> outside = new ArrayList<>();
+    final List<PreparedOperator> prepared = new ArrayList<>();
   }
 
   /**
    * Modes of one operator, those in the margin after those in the window, with their error bars.
    */
-  private record Solved(ModeSet set, List<Optional<MeshError>> bars) {}
+  private record Solved(ModeSet set, List<Optional<MeshError>> bars, PreparedOperator prepared) {}
 
   private Found search(List<CaseProblem> ladder) {
     CaseProblem problem = ladder.get(ladder.size() - 1);
@@ -120,6 +170,7 @@ public final class ModesStudy {
     for (int i = 0; i < n; i++) {
       CaseProblem.Part part = problem.parts().get(i);
       ModeSet set = all.get(i).set;
+      found.prepared.add(all.get(i).prepared);
       Certificate c = Certificate.of(part.name(), part.order(), set);
       found.certificates.add(
           new Certificate(
@@ -149,12 +200,14 @@ public final class ModesStudy {
     Mesh coarsest = ladder.get(0).shape().mesh();
     List<ErrorBars.Level> levels = new ArrayList<>();
     ModeSet set = null;
+    PreparedOperator prepared = null;
     for (CaseProblem level : ladder) {
       AssembledProblem assembled = level.parts().get(part).assembled();
       boolean finest = level == ladder.get(ladder.size() - 1);
+      prepared = new PreparedOperator(assembled.operator());
       set =
           ModeSearch.find(
-              assembled.operator(),
+              prepared,
               finest ? caseFile.window() : wider(caseFile.window()),
               SearchSettings.standard());
       CommonPlaces places = new CommonPlaces(coarsest, level.shape().mesh());
@@ -164,7 +217,7 @@ public final class ModesStudy {
               modes,
               modes.stream().map(m -> places.of(assembled.expand(m.re(), m.im()))).toList()));
     }
-    return new Solved(set, ErrorBars.of(levels.get(0), levels.get(1), levels.get(2)));
+    return new Solved(set, ErrorBars.of(levels.get(0), levels.get(1), levels.get(2)), prepared);
   }
 
   /** A coarse mesh moves modes over the window's edge, upwards above all. */

@@ -1,15 +1,37 @@
 package org.annulet.post.meaning;
 
+import java.util.List;
 import java.util.Optional;
 
 /**
- * One row of the results: the mode, its label, and what drives and damps it.
+ * One row of the results: the mode, its label, what drives and damps it, and what would move it.
  *
  * @param view mode and field
  * @param label its label
  * @param budget growth budget, where it was made
+ * @param sensitivities to the inputs of the case, the strongest effect on the growth rate first;
+ *     empty where they were not computed
  */
-public record ModeEntry(ModeView view, ModeLabel label, Optional<GrowthBudget> budget) {
+public record ModeEntry(
+    ModeView view,
+    ModeLabel label,
+    Optional<GrowthBudget> budget,
+    List<ParameterSensitivity> sensitivities) {
+  /** Copies the list. */
+  public ModeEntry {
+    sensitivities = List.copyOf(sensitivities);
+  }
+
+  /** Without sensitivities. */
+  public ModeEntry(ModeView view, ModeLabel label, Optional<GrowthBudget> budget) {
+    this(view, label, budget, List.of());
+  }
+
+  /** The same with sensitivities. */
+  public ModeEntry with(List<ParameterSensitivity> all) {
+    return new ModeEntry(view, label, budget, all);
+  }
+
   /** Rounding of a growth rate per |s|: sums over the mesh in double precision keep about this. */
   private static final double ROUNDING = 1e-9;
 

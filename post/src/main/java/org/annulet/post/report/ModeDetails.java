@@ -3,14 +3,13 @@ package org.annulet.post.report;
 import static org.annulet.post.chart.Svg.escape;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
 import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
-import org.annulet.post.meaning.TermSensitivity;
+import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.table.Numbers;
 
 /** What stands beside the moving field of a mode: facts, growth budget, sensitivities. */
@@ -23,8 +22,8 @@ final class ModeDetails {
     ModeEntry e = input.results().modes().get(i);
     facts(b, input, e);
     e.budget().ifPresent(budget -> budget(b, budget));
-    if (!input.sensitivities().isEmpty() && !input.sensitivities().get(i).isEmpty()) {
-      sensitivities(b, input.sensitivities().get(i));
+    if (!e.sensitivities().isEmpty()) {
+      sensitivities(b, e.sensitivities());
     }
   }
 
@@ -118,21 +117,39 @@ final class ModeDetails {
         .append("%\"></i></span></div>\n");
   }
 
-  private static void sensitivities(StringBuilder b, List<TermSensitivity> all) {
-    List<TermSensitivity> sorted = new ArrayList<>(all);
-    sorted.sort(Comparator.comparingDouble((TermSensitivity s) -> -Math.abs(s.growthPerPercent())));
-    b.append("<div class=\"scroll\" tabindex=\"0\"><table><thead><tr><th>one percent more of</th>")
-        .append("<th class=\"num\">growth rate [1/s]</th><th class=\"num\">frequency [Hz]</th>")
-        .append("</tr></thead><tbody>");
-    for (TermSensitivity s : sorted.subList(0, Math.min(ITEMS, sorted.size()))) {
-      b.append("<tr><td>")
-          .append(escape(s.name()))
-          .append("</td><td class=\"num\">")
-          .append(Numbers.signed(s.growthPerPercent()).replace('-', '−'))
-          .append("</td><td class=\"num\">")
-          .append(Numbers.signed(s.frequencyPerPercent()).replace('-', '−'))
-          .append("</td></tr>");
+  private static void sensitivities(StringBuilder b, List<ParameterSensitivity> all) {
+    List<ParameterSensitivity> top = all.subList(0, Math.min(ITEMS, all.size()));
+    double largest = top.stream().mapToDouble(s -> Math.abs(s.growthPerPercent())).max().orElse(0);
+    b.append("<div class=\"bars levers\"><h4>One percent more of … moves the growth rate by [1/s]")
+        .append("</h4>\n");
+    for (ParameterSensitivity s : top) {
+      bar(
+          b,
+          new String[] {
+            "bar",
+            s.key() + " (" + s.value() + ")",
+            Numbers.signed(s.growthPerPercent())
+                + " (and "
+                + Numbers.signed(s.frequencyPerPercent())
+                + " Hz; straight within "
+                + range(s.linearRange())
+                + ")"
+          },
+          largest > 0 ? s.growthPerPercent() / largest : 0);
     }
-    b.append("</tbody></table></div>\n");
+    if (all.size() > top.size()) {
+      b.append("<p class=\"sign\">")
+          .append(all.size() - top.size())
+          .append(" weaker inputs stand in sensitivities.csv.</p>");
+    }
+    b.append("</div>\n");
+  }
+
+  /** How far a straight line serves, in percent of the input. */
+  private static String range(double percent) {
+    if (!(percent < 100)) {
+      return "±100 %";
+    }
+    return String.format(Locale.ROOT, percent < 1 ? "±%.1g %%" : "±%.0f %%", percent);
   }
 }

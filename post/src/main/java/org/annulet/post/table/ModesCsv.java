@@ -58,7 +58,7 @@ public final class ModesCsv {
     return b.toString();
   }
 
-  private static String number(double v) {
+  static String number(double v) {
     return Double.isNaN(v) || Double.isInfinite(v) ? "" : Double.toString(v);
   }
 

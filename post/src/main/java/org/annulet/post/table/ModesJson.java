@@ -9,6 +9,7 @@ import org.annulet.post.meaning.Certificate;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
+import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.modes.Mode;
 
@@ -65,6 +66,20 @@ public final class ModesJson {
     json.endArray();
   }
 
+  private static void sensitivities(JsonWriter json, List<ParameterSensitivity> all) {
+    json.array("sensitivities");
+    for (ParameterSensitivity s : all) {
+      json.object()
+          .text("key", s.key())
+          .text("value", s.value())
+          .number("growth_rate_change_per_s_per_percent", s.growthPerPercent())
+          .number("frequency_change_hz_per_percent", s.frequencyPerPercent())
+          .number("linear_range_percent", s.linearRange())
+          .endObject();
+    }
+    json.endArray();
+  }
+
   private static void modes(JsonWriter json, String key, List<ModeEntry> modes) {
     json.array(key);
     for (ModeEntry entry : modes) {
@@ -102,6 +117,7 @@ public final class ModesJson {
         }
         json.endArray().number("growth_budget_remainder_per_s", budget.remainder());
       }
+      sensitivities(json, entry.sensitivities());
       json.endObject();
     }
     json.endArray();

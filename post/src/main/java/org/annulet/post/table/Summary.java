@@ -7,6 +7,7 @@ import java.util.Optional;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeEntry.Stability;
+import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.meaning.Results;
 
 /** The answer in plain sentences: how many modes, which grow, what drives and damps the worst. */
@@ -18,6 +19,9 @@ public final class Summary {
           "Zero mean flow, linear acoustics and a given flame response are assumed.",
           "Stability is shown by test under the responsible engineer, the maker's limits and local"
               + " codes.");
+
+  /** Inputs named in the sentence on sensitivities. */
+  private static final int NAMED = 3;
 
   private Summary() {}
 
@@ -57,7 +61,7 @@ public final class Summary {
             + "), growth rate "
             + Numbers.withError(e.view().mode().growthRate(), e.view().growthError(), "1/s");
     if (e.budget().isEmpty()) {
-      return head + ".";
+      return head + "." + perPercent(e);
     }
     GrowthBudget budget = e.budget().get();
     return head
@@ -65,7 +69,27 @@ public final class Summary {
         + named(budget.drivers())
         + ", damped by "
         + named(budget.dampers())
-        + ".";
+        + "."
+        + perPercent(e);
+  }
+
+  /** What one percent more of the strongest inputs does; empty where that was not computed. */
+  private static String perPercent(ModeEntry e) {
+    List<ParameterSensitivity> top =
+        e.sensitivities().stream().limit(NAMED).filter(p -> p.growthPerPercent() != 0).toList();
+    if (top.isEmpty()) {
+      return "";
+    }
+    StringBuilder b = new StringBuilder(" Its growth rate moves per percent more of ");
+    for (int k = 0; k < top.size(); k++) {
+      ParameterSensitivity p = top.get(k);
+      b.append(k == 0 ? "" : k + 1 == top.size() ? " and of " : ", of ")
+          .append(p.key())
+          .append(" by ")
+          .append(Numbers.signed(p.growthPerPercent()))
+          .append(k == 0 ? " 1/s" : "");
+    }
+    return b.append('.').toString();
   }
 
   private static String named(List<GrowthBudget.Item> items) {

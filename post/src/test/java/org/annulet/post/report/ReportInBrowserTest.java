@@ -10,7 +10,6 @@ import java.util.List;
 import java.util.logging.Level;
 import org.annulet.post.Demo;
 import org.annulet.post.chart.Marker;
-import org.annulet.post.meaning.TermSensitivity;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
@@ -47,9 +46,7 @@ class ReportInBrowserTest {
         List.of(
             new Marker("flame <1>", Marker.Kind.FLAME, 0.3, 0.6),
             new Marker("damper 1", Marker.Kind.PORT, 0.45, 1.6));
-    List<List<TermSensitivity>> answers =
-        java.util.Collections.nCopies(6, List.of(new TermSensitivity("flame <1>", 0.7, -0.02)));
-    return new ReportInput(demo.results, demo.chamber, facts, marks, answers);
+    return new ReportInput(demo.results, demo.chamber, facts, marks);
   }
 
   @BeforeAll

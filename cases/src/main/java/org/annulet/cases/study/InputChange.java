@@ -1,0 +1,84 @@
+package org.annulet.cases.study;
+
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.CaseSource;
+
+/**
+ * One number of a case and the case with that number a little smaller and a little larger.
+ *
+ * @param value as it stands in the case
+ * @param smaller the case with value · (1 − step)
+ * @param larger the case with value · (1 + step)
+ */
+record InputChange(CaseSource.Value value, CaseFile smaller, CaseFile larger) {
+  /**
+   * Relative step. The operator's first difference errs by a sixth of the square of step · ωτ for a
+   * delay of ωτ turns; its second difference by rounding over the square of the step.
+   */
+  static final double STEP = 2e-4;
+
+  /** Parts of a case that do not enter its operators, or only through the shape of the mesh. */
+  private static final List<String> NOT_INPUTS =
+      List.of("geometry", "window", "outputs", "variants");
+
+  /**
+   * The numbers of a case that can be changed by themselves on the same mesh: all but those that
+   * shape the mesh, those that are zero and those bound to others, as the parts of a blend.
+   */
+  static List<CaseSource.Value> candidates(CaseFile caseFile) {
+    return caseFile.source().values().stream()
+        .filter(v -> v.si() != 0 && Double.isFinite(v.si()))
+        .filter(v -> !v.text().equals(CaseSource.Value.DEFAULT))
+        .filter(v -> NOT_INPUTS.stream().noneMatch(part -> in(part, v.key())))
+        .toList();
+  }
+
+  private static boolean in(String part, String key) {
+    return key.equals(part) || key.startsWith(part + ".");
+  }
+
+  /** The two changed cases; empty where the number cannot be changed by itself. */
+  static Optional<InputChange> of(CaseFile caseFile, CaseSource.Value value) {
+    Optional<CaseFile> smaller = changed(caseFile, value, 1 - STEP);
+    Optional<CaseFile> larger = changed(caseFile, value, 1 + STEP);
+    return smaller.isPresent() && larger.isPresent()
+        ? Optional.of(new InputChange(value, smaller.get(), larger.get()))
+        : Optional.empty();
+  }
+
+  private static Optional<CaseFile> changed(
+      CaseFile caseFile, CaseSource.Value value, double factor) {
+    double wanted = value.si() * factor;
+    String number = Double.toString(wanted);
+    // A list may state its unit once; there the numbers carry none.
+    for (String text :
+        List.of((number + " " + value.kind().siUnit()).strip(), scaled(value.text(), factor))) {
+      if (text.isEmpty()) {
+        continue;
+      }
+      Optional<CaseFile> c = caseFile.with(Map.of(value.key(), text)).caseFile();
+      if (c.isPresent() && c.get().source().values().stream().anyMatch(v -> is(v, value, wanted))) {
+        return c;
+      }
+    }
+    return Optional.empty();
+  }
+
+  private static boolean is(CaseSource.Value got, CaseSource.Value value, double wanted) {
+    return got.key().equals(value.key()) && Math.abs(got.si() - wanted) < 1e-9 * Math.abs(wanted);
+  }
+
+  /** The number at the beginning of a text, scaled; empty without one. */
+  private static String scaled(String text, double factor) {
+    String number = text.strip().replaceFirst("[^0-9.eE+-].*", "");
+    try {
+      return String.format(Locale.ROOT, "%.15g", Double.parseDouble(number) * factor);
+    } catch (NumberFormatException e) {
+      return "";
+    }
+  }
+}

@@ -1,0 +1,141 @@
+package org.annulet.cases.study;
+
+import java.util.ArrayList;
+import java.util.Collection;
+import java.util.Comparator;
+import java.util.IdentityHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.TreeSet;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.CaseSource;
+import org.annulet.post.meaning.ParameterSensitivity;
+import org.annulet.solver.derivative.DifferenceOfOperators;
+import org.annulet.solver.derivative.ModeDerivative;
+import org.annulet.solver.derivative.Slope;
+import org.annulet.solver.eigen.PreparedOperator;
+import org.annulet.solver.modes.Mode;
+import org.annulet.solver.operator.AcousticOperator;
+
+/**
+ * How every mode moves with every number of the case: the case is read again with one number a
+ * little smaller and a little larger, its operators are assembled on the same mesh, and the
+ * difference stands between left and right vector. No mode is solved anew.
+ */
+final class Sensitivities {
+  /** Effects below this, in 1/s and 2π Hz per percent and relative to |s|, are rounding. */
+  private static final double NOTHING = 1e-10;
+
+  private final CaseFile caseFile;
+  private final CaseProblem problem;
+  private final List<Group> groups = new ArrayList<>();
+  private final List<String> leftOut = new ArrayList<>();
+
+  /** Modes of one eigenvalue of one operator. */
+  private record Group(int part, PreparedOperator prepared, List<Mode> members) {}
+
+  /** One row of a mode's table while it is being filled. */
+  private record Effect(Mode mode, ParameterSensitivity row) {}
+
+  /**
+   * Begins with no mode.
+   *
+   * @param problem the case on its finest mesh
+   */
+  Sensitivities(CaseFile caseFile, CaseProblem problem) {
+    this.caseFile = caseFile;
+    this.problem = problem;
+  }
+
+  /**
+   * Adds the modes of one eigenvalue: one, or the members of an exact pair.
+   *
+   * @param part index of the operator in the problem
+   */
+  void add(int part, PreparedOperator prepared, List<Mode> members) {
+    groups.add(new Group(part, prepared, List.copyOf(members)));
+  }
+
+  /** Numbers that enter the operators but could not be varied by themselves; after the run. */
+  List<String> leftOut() {
+    return List.copyOf(new TreeSet<>(leftOut));
+  }
+
+  /** The table of every mode, the strongest effect on the growth rate first. */
+  Map<Mode, List<ParameterSensitivity>> run() {
+    List<ModeDerivative> derivatives =
+        groups.parallelStream().map(g -> ModeDerivative.of(g.prepared, g.members)).toList();
+    List<Optional<List<Effect>>> all =
+        InputChange.candidates(caseFile).parallelStream()
+            .map(v -> effects(v, derivatives))
+            .toList();
+    Map<Mode, List<ParameterSensitivity>> tables = new IdentityHashMap<>();
+    groups.forEach(g -> g.members.forEach(m -> tables.put(m, new ArrayList<>())));
+    all.stream()
+        .flatMap(Optional::stream)
+        .flatMap(Collection::stream)
+        .forEach(e -> tables.get(e.mode).add(e.row));
+    Comparator<ParameterSensitivity> strongest =
+        Comparator.comparingDouble((ParameterSensitivity p) -> -Math.abs(p.growthPerPercent()));
+    tables.values().forEach(t -> t.sort(strongest));
+    return tables;
+  }
+
+  private Optional<List<Effect>> effects(CaseSource.Value value, List<ModeDerivative> derivatives) {
+    Optional<InputChange> change = InputChange.of(caseFile, value);
+    if (change.isEmpty()) {
+      note(value);
+      return Optional.empty();
+    }
+    CaseProblem smaller = CaseProblem.on(change.get().smaller(), problem.shape());
+    CaseProblem larger = CaseProblem.on(change.get().larger(), problem.shape());
+    List<Effect> effects = new ArrayList<>();
+    for (int k = 0; k < groups.size(); k++) {
+      Group g = groups.get(k);
+      if (!comparable(g, smaller) || !comparable(g, larger)) {
+        note(value);
+        return Optional.empty();
+      }
+      DifferenceOfOperators difference =
+          new DifferenceOfOperators(
+              g.prepared, operator(smaller, g.part), operator(larger, g.part), InputChange.STEP);
+      List<Slope> slopes = derivatives.get(k).slopes(difference);
+      for (int j = 0; j < slopes.size(); j++) {
+        effect(g.members.get(j), value, slopes.get(j)).ifPresent(effects::add);
+      }
+    }
+    return Optional.of(effects);
+  }
+
+  private void note(CaseSource.Value value) {
+    synchronized (leftOut) {
+      leftOut.add(value.key());
+    }
+  }
+
+  private boolean comparable(Group g, CaseProblem changed) {
+    return changed.parts().size() == problem.parts().size()
+        && DifferenceOfOperators.comparable(g.prepared.operator(), operator(changed, g.part));
+  }
+
+  private static AcousticOperator operator(CaseProblem problem, int part) {
+    return problem.parts().get(part).assembled().operator();
+  }
+
+  private static Optional<Effect> effect(Mode mode, CaseSource.Value value, Slope slope) {
+    double size = Math.hypot(mode.growthRate(), 2 * Math.PI * mode.frequency());
+    if (slope.first().abs() < 100 * NOTHING * size) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        new Effect(
+            mode,
+            new ParameterSensitivity(
+                value.key(),
+                value.text(),
+                slope.first().getReal() / 100,
+                slope.first().getImaginary() / (200 * Math.PI),
+                100 * slope.linearRange())));
+  }
+}
