@@ -17,12 +17,6 @@ final class Refiner {
 
   private static final double SIN2 = Math.pow(Math.sin(Math.toRadians(LEAST_ANGLE)), 2);
 
-  /** Height over side of an off-centre that sees the side under one degree more than is needed. */
-  private static final double OFF_CENTRE = 0.5 / Math.tan(Math.toRadians(0.5 * (LEAST_ANGLE + 1)));
-
-  /** Wanted side of new triangles, in parts of the largest allowed. */
-  private static final double AIM = 0.85;
-
   private final Triangulation mesh;
   private final Segments segments;
   private final SizeRules rules;
@@ -41,14 +35,15 @@ final class Refiner {
   private int[] segmentStack = new int[256];
   private int segmentCount;
   private boolean[] forced = new boolean[256];
-  private boolean[] dead = new boolean[256];
   private final TriangleQueue queue = new TriangleQueue();
   private int[] hits = new int[16];
-  private double newX;
-  private double newY;
+  private final Placement place;
+  private final Flips flips;
 
   Refiner(Triangulation mesh, BoundaryNodes nodes, SizeRules rules) {
     this.mesh = mesh;
+    this.place = new Placement(mesh);
+    this.flips = new Flips(mesh);
     this.segments = mesh.segments;
     this.rules = rules;
     this.sharp = nodes.sharp;
@@ -149,9 +144,8 @@ final class Refiner {
   private void pushSegment(int s) {
     if (s >= forced.length) {
       forced = Arrays.copyOf(forced, 2 * s);
-      dead = Arrays.copyOf(dead, 2 * s);
     }
-    if (forced[s] || dead[s]) {
+    if (forced[s]) {
       return;
     }
     if (segmentCount == segmentStack.length) {
@@ -209,8 +203,7 @@ final class Refiner {
     if (!apart || !mesh.cavityAcross(e, px, py)) {
       mesh.seg[e] = s;
       mesh.seg[f] = s;
-      pushDead(s);
-      return;
+      throw rules.indivisible(segments.edgeOf[segments.piece[s]], px, py);
     }
     int firstRight = 0;
     while (mesh.start[mesh.rim[firstRight]] != a) {
@@ -235,16 +228,8 @@ final class Refiner {
       sides[2 * i] = 4 * mesh.changed[i];
       sides[2 * i + 1] = 4 * mesh.changed[i] + 1;
     }
-    mesh.legalise(sides, 2 * n);
+    flips.legalise(sides, 2 * n);
     afterChange(true);
-  }
-
-  private void pushDead(int s) {
-    if (s >= dead.length) {
-      forced = Arrays.copyOf(forced, 2 * s);
-      dead = Arrays.copyOf(dead, 2 * s);
-    }
-    dead[s] = true;
   }
 
   private void afterChange(boolean checkSegments) {
@@ -309,7 +294,9 @@ final class Refiner {
     if (!big && spared(e)) {
       return;
     }
-    place(e, least, twice, h, big, thin);
+    place.choose(e, least, twice, big ? h : 0, thin);
+    double newX = place.x;
+    double newY = place.y;
     int u = mesh.walk(t, newX, newY, false);
     if (u < 0) {
       if (mesh.blocker >= 0) {
@@ -357,9 +344,6 @@ final class Refiner {
     if (!big && clustered && half2 < least) {
       return;
     }
-    if (s < dead.length && dead[s]) {
-      return;
-    }
     pushSegment(s);
     enqueue(t);
   }
@@ -370,48 +354,6 @@ final class Refiner {
 
   private static double square(double v) {
     return v * v;
-  }
-
-  /** Where the new node of a bad triangle goes; e is its shortest side. */
-  private void place(int e, double least, double twice, double h, boolean big, boolean thin) {
-    int a = mesh.start[e];
-    int b = mesh.start[Triangulation.next(e)];
-    int c = mesh.start[Triangulation.prev(e)];
-    double length = Math.sqrt(least);
-    double distance = 0.5 * length * dot(c, a, b) / twice;
-    if (thin) {
-      distance = Math.min(distance, OFF_CENTRE * length);
-    }
-    if (big) {
-      double aim = AIM * h;
-      double apex = Math.sqrt(Math.max(aim * aim - 0.25 * least, 0.25 * least));
-      if (apex < distance) {
-        distance = Math.max(apex, behind(e, length));
-      }
-    }
-    double share = distance / length;
-    newX = 0.5 * (mesh.x[a] + mesh.x[b]) - share * (mesh.y[b] - mesh.y[a]);
-    newY = 0.5 * (mesh.y[a] + mesh.y[b]) + share * (mesh.x[b] - mesh.x[a]);
-  }
-
-  /** Signed height over side e of the neighbour's circumcentre: the disc is empty from there on. */
-  private double behind(int e, double length) {
-    int f = mesh.twin[e];
-    if (mesh.seg[e] >= 0) {
-      return 0;
-    }
-    int a = mesh.start[f];
-    int b = mesh.start[Triangulation.next(f)];
-    int c = mesh.start[Triangulation.prev(f)];
-    double twice =
-        (mesh.x[b] - mesh.x[a]) * (mesh.y[c] - mesh.y[a])
-            - (mesh.x[c] - mesh.x[a]) * (mesh.y[b] - mesh.y[a]);
-    return -0.5 * length * dot(c, a, b) / twice;
-  }
-
-  private double dot(int c, int a, int b) {
-    return (mesh.x[a] - mesh.x[c]) * (mesh.x[b] - mesh.x[c])
-        + (mesh.y[a] - mesh.y[c]) * (mesh.y[b] - mesh.y[c]);
   }
 
   /** Whether a thin triangle with shortest side e is the doing of a sharp corner. */

@@ -13,9 +13,11 @@ final class SegmentRecovery {
   static final int MEETS_NODE = -1;
 
   private final Triangulation mesh;
+  private final Flips flips;
 
   SegmentRecovery(Triangulation mesh) {
     this.mesh = mesh;
+    this.flips = new Flips(mesh);
   }
 
   /**
@@ -37,13 +39,13 @@ final class SegmentRecovery {
       }
       int[] side = crossed.poll();
       int e = mesh.find(side[0], side[1]);
-      if (!mesh.convex(e)) {
+      if (!flips.convex(e)) {
         crossed.add(side);
         continue;
       }
       int c = mesh.start[Triangulation.prev(e)];
       int d = mesh.start[Triangulation.prev(mesh.twin[e])];
-      mesh.flip(e);
+      flips.flip(e);
       boolean touches = c == a || c == b || d == a || d == b;
       if (!touches && side(a, b, c) != side(a, b, d)) {
         crossed.add(new int[] {c, d});
@@ -67,7 +69,7 @@ final class SegmentRecovery {
         sides[n++] = g;
       }
     }
-    mesh.legalise(sides, n);
+    flips.legalise(sides, n);
     e = mesh.find(a, b);
     mesh.seg[e] = -1;
     mesh.seg[mesh.twin[e]] = -1;

@@ -14,6 +14,7 @@ final class SizeRules {
   private final Sizing sizing;
   private final double[] edge;
   private final double[] zone;
+  private final String[] edgeName;
 
   /**
    * Resolves names.
@@ -39,8 +40,10 @@ final class SizeRules {
               sizing.zones().getOrDefault(zoneNames.get(z), Double.POSITIVE_INFINITY));
     }
     edge = new double[outline.edges().size()];
+    edgeName = new String[edge.length];
     for (int e = 0; e < edge.length; e++) {
       String n = name.apply(outline.edges().get(e).name());
+      edgeName[e] = n;
       edge[e] =
           Math.min(
               sizing.edges().getOrDefault(n, Double.POSITIVE_INFINITY),
@@ -113,5 +116,17 @@ final class SizeRules {
             sizing.nodeCap(),
             where,
             sizing.largestSide()));
+  }
+
+  MeshingLimitException indivisible(int edgeNumber, double x, double y) {
+    return new MeshingLimitException(
+        String.format(
+            Locale.ROOT,
+            "edge '%s' cannot be divided any further at (%.12g, %.12g) m: neighbouring points are"
+                + " as close as numbers can tell%n    mend: move the edges there apart or let them"
+                + " end in one point, or give a larger size",
+            edgeName[edgeNumber],
+            x,
+            y));
   }
 }

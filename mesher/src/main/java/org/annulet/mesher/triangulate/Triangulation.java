@@ -333,71 +333,8 @@ final class Triangulation {
     return -1;
   }
 
-  /** Turns the diagonal of the two triangles beside half-edge {@code e}. */
-  void flip(int e) {
-    int f = twin[e];
-    int ne = next(e);
-    int pe = prev(e);
-    int nf = next(f);
-    int pf = prev(f);
-    int a = start[e];
-    int b = start[f];
-    int c = start[pe];
-    int d = start[pf];
-    int twinNe = twin[ne];
-    int segNe = seg[ne];
-    int twinNf = twin[nf];
-    int segNf = seg[nf];
-    start[ne] = d;
-    start[nf] = c;
-    link(e, twinNf, segNf);
-    link(f, twinNe, segNe);
-    link(ne, nf, -1);
-    out[a] = e;
-    out[b] = f;
-    out[c] = pe;
-    out[d] = pf;
-  }
-
-  /** Whether the two triangles beside {@code e} form a strictly convex quadrilateral. */
-  boolean convex(int e) {
-    int f = twin[e];
-    int a = start[e];
-    int b = start[f];
-    int c = start[prev(e)];
-    int d = start[prev(f)];
-    return orient(c, d, x[a], y[a]) < 0 && orient(c, d, x[b], y[b]) > 0;
-  }
-
-  /** Flips until every side reached from the given ones is Delaunay or a segment. */
-  void legalise(int[] sides, int count) {
-    int[] work = Arrays.copyOf(sides, Math.max(count, 16));
-    int n = count;
-    long cap = 100L * triangleCount + 1000;
-    while (n > 0 && cap-- > 0) {
-      int e = work[--n];
-      int f = twin[e];
-      if (f < 0 || seg[e] >= 0) {
-        continue;
-      }
-      int d = start[prev(f)];
-      if (!inCircle(e >> 2, x[d], y[d]) || !convex(e)) {
-        continue;
-      }
-      flip(e);
-      if (n + 4 > work.length) {
-        work = Arrays.copyOf(work, 2 * work.length);
-      }
-      work[n++] = e;
-      work[n++] = prev(e);
-      work[n++] = f;
-      work[n++] = prev(f);
-      note(e >> 2);
-      note(f >> 2);
-    }
-  }
-
-  private void note(int t) {
+  /** Puts a triangle on the list of the changed. */
+  void note(int t) {
     if (changedCount == changed.length) {
       changed = Arrays.copyOf(changed, 2 * changedCount);
     }
