@@ -15,6 +15,7 @@ import org.annulet.solver.modes.Window;
  * @param gas the gas in it
  * @param walls by edge or face name, in the order of the file; others are rigid
  * @param twoPorts losses across inner edges, in the order of the file; may be empty
+ * @param dampers at their places, in the order of the file; may be empty
  * @param flames in the order of the file; may be empty
  * @param window where modes are wanted
  * @param azimuthalOrders orders m wanted on a section, increasing; empty for other kinds
@@ -30,6 +31,7 @@ public record CaseFile(
     Gas gas,
     Map<String, Wall> walls,
     List<TwoPort> twoPorts,
+    List<Damper> dampers,
     List<Flame> flames,
     Window window,
     List<Integer> azimuthalOrders,

@@ -9,7 +9,8 @@ import java.util.Locale;
  * in {@code !}. The JSON Schema holds the same keys under {@code $defs}; a test keeps them equal.
  */
 enum CaseKeys {
-  CASE("annulet! title! about geometry! gas! walls two_ports flames window! outputs variants"),
+  CASE(
+      "annulet! title! about geometry! gas! walls two_ports dampers flames window! outputs variants"),
   RING("kind! burner_count! unrolled_radius mesh_size! mesh_size_at sides_per_wavelength zones!"),
   ANNULUS("name! shape! mean_radius! gap! length!"),
   DUCTS("name! shape! mean_radius! bore area length!"),
@@ -32,6 +33,10 @@ enum CaseKeys {
   WALL("impedance admittance choked_nozzle"),
   CHOKED_NOZZLE("mach!"),
   TWO_PORT("loss_coefficient pressure_drop velocity effective_length flow_from"),
+  DAMPER("resonator quarter_wave gas_of at! mouth_width"),
+  RESONATOR("neck_bore! necks neck_length! end_correction volume! resistance!"),
+  QUARTER_WAVE("bore! length! end_correction resistance!"),
+  DAMPER_PLACE("edge face x! y r count angles burners"),
   FLAME("heat_release! place! reference reference_velocity! response! staging"),
   PLACE("sheet answer zone from to distance width"),
   REFERENCE("edge flow_from zone from to distance width direction"),
@@ -45,7 +50,6 @@ enum CaseKeys {
   static final List<String> RESERVED =
       List.of(
           "accuracy",
-          "dampers",
           "liner",
           "reflection",
           "impedance_table",

@@ -134,12 +134,17 @@ public final class CaseReader {
         geometry.isPresent()
             ? m.get("two_ports").map(new TwoPortReader(shape)::read).orElse(List.of())
             : List.of();
+    List<Damper> dampers =
+        geometry.isPresent()
+            ? m.get("dampers").map(new DamperReader(shape)::read).orElse(List.of())
+            : List.of();
     List<Flame> flames =
         geometry.isPresent()
             ? m.get("flames").map(new FlameReader(shape)::read).orElse(List.of())
             : List.of();
     if (!flames.isEmpty()
         && twoPorts.isEmpty()
+        && dampers.isEmpty()
         && walls.values().stream().noneMatch(Wall::takesEnergy)) {
       m.at("flames")
           .caution(
@@ -162,6 +167,7 @@ public final class CaseReader {
                 gas,
                 walls,
                 twoPorts,
+                dampers,
                 flames,
                 window.orElseThrow().window(),
                 window.orElseThrow().orders(),

@@ -6,13 +6,11 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.TreeSet;
 import org.annulet.cases.units.QuantityKind;
 
 /** Reads {@code flames}. */
 final class FlameReader {
   private static final List<String> ANSWERS = List.of("uniform", "pointwise");
-  private static final List<String> PATTERNS = List.of("every_second", "first_half", "second_half");
 
   private final Geometry geometry;
   private final EdgeNames names;
@@ -293,7 +291,7 @@ final class FlameReader {
     for (Entry item : entry.items()) {
       Mapping m = Mapping.of(item, CaseKeys.STAGING);
       List<Integer> burners =
-          m.get("burners").map(e -> burners(e, ring.burnerCount())).orElse(List.of());
+          m.get("burners").map(e -> Burners.read(e, ring.burnerCount())).orElse(List.of());
       if (item.isMapping() && !m.has("gain") && !m.has("delay") && !m.has("heat_share")) {
         item.fault("an exception that changes nothing", "add gain, delay or heat_share");
       }
@@ -312,38 +310,5 @@ final class FlameReader {
     return entries.containsKey(key)
         ? OptionalDouble.of(entries.get(key).number(kind, range))
         : OptionalDouble.empty();
-  }
-
-  private static List<Integer> burners(Entry entry, int count) {
-    List<Integer> burners = new ArrayList<>();
-    if (entry.isText()) {
-      String pattern = entry.choice(PATTERNS).orElse("");
-      for (int b = 1; b <= count; b++) {
-        boolean taken =
-            switch (pattern) {
-              case "every_second" -> b % 2 == 0;
-              case "first_half" -> 2 * b <= count;
-              case "second_half" -> 2 * b > count;
-              default -> false;
-            };
-        if (taken) {
-          burners.add(b);
-        }
-      }
-      if (pattern.equals("every_second") && count % 2 != 0) {
-        entry.caution(
-            "every second of " + count + " burners: two neighbours stay alike",
-            "name the burners one by one if that is not meant");
-      }
-      return burners;
-    }
-    for (Entry item : entry.items()) {
-      int b = item.whole(1, count >= 1 ? count : GeometryReader.MOST_BURNERS);
-      if (b >= 1 && burners.contains(b)) {
-        item.fault("burner " + b + " stands here twice", "leave one out");
-      }
-      burners.add(b);
-    }
-    return List.copyOf(new TreeSet<>(burners));
   }
 }

@@ -45,7 +45,7 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
     CaseGas gas = new CaseGas(caseFile);
     Medium medium = gas.on(shape.mesh());
     CaseFlames flames = new CaseFlames(caseFile);
-    if (shape.cells().isPresent() && flames.allBurnersAlike()) {
+    if (shape.cells().isPresent() && flames.allBurnersAlike() && caseFile.dampers().isEmpty()) {
       RingCells cells = shape.cells().get();
       BlochAssembly bloch =
           builder(caseFile, cells.half(), shape, gas.on(cells.half())).bloch(cells);
@@ -75,7 +75,8 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
     }
     String method =
         shape.cells().isPresent()
-            ? "The burners differ: the whole ring is solved."
+            ? (flames.allBurnersAlike() ? "Dampers break the symmetry" : "The burners differ")
+                + ": the whole ring is solved."
             : "The plane is solved as a whole.";
     return new CaseProblem(shape, medium, List.of(new Part("", null, 1, builder.build())), method);
   }
@@ -85,6 +86,7 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
     ProblemBuilder b = new ProblemBuilder(mesh, shape.geometry(), medium);
     CaseWalls.put(caseFile, b);
     CaseTwoPorts.put(caseFile, mesh, medium, b);
+    CaseDampers.put(caseFile, mesh, medium, b);
     new CaseFlames(caseFile).all().forEach(b::flame);
     return b;
   }

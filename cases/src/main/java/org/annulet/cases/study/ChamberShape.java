@@ -7,6 +7,7 @@ import java.util.Map;
 import java.util.Optional;
 import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.Damper;
 import org.annulet.cases.read.DrawnShape;
 import org.annulet.cases.read.Geometry;
 import org.annulet.mesher.geometry.GeometryFault;
@@ -103,7 +104,7 @@ public record ChamberShape(
 
   private static ChamberShape mesh(CaseFile caseFile, double scale) {
     Geometry g = caseFile.geometry();
-    Sizing sizing = sizing(g.meshSize(), g.zoneNames());
+    Sizing sizing = nearDampers(caseFile, sizing(g.meshSize(), g.zoneNames()));
     if (g.meshSize().sidesPerWavelength() > 0) {
       Sizing.Builder b = sizing.toBuilder();
       perWavelength(caseFile, shape(g, sizing.scaled(4)).mesh())
@@ -111,6 +112,27 @@ public record ChamberShape(
       return shape(g, b.build().scaled(scale));
     }
     return shape(g, sizing.scaled(scale));
+  }
+
+  /** Half the mouth's width at every damper; on a ring in every cell, which stay alike. */
+  private static Sizing nearDampers(CaseFile caseFile, Sizing sizing) {
+    Sizing.Builder b = sizing.toBuilder();
+    for (Damper damper : caseFile.dampers()) {
+      double width = CaseDampers.mouthWidth(damper);
+      double size = Math.min(0.5 * width, sizing.largestSide());
+      for (Damper.Place place : damper.places()) {
+        if (place instanceof Damper.OnEdge e) {
+          b.near(e.x(), e.y(), width, size);
+        } else {
+          Geometry.Ring ring = (Geometry.Ring) caseFile.geometry();
+          Damper.OnFace f = (Damper.OnFace) place;
+          double pitch = 2 * Math.PI / ring.burnerCount();
+          double inCell = Math.IEEEremainder(f.angle(), pitch);
+          b.near(f.x(), Math.abs(inCell) * ring.unrolledRadius(), width, size);
+        }
+      }
+    }
+    return b.build();
   }
 
   /** Largest sides that leave the wanted number per wavelength in the slowest gas of each zone. */

@@ -126,7 +126,29 @@ class BrokenCasesTest {
             5,
             "unknown key 'burner_cuont'",
             "'burner_count'?"),
-        ring("walls:", "dampers: {}\nwalls:", 18, "not supported in this version", "leave it out"),
+        ring(
+            "walls:",
+            "dampers: {d: {resonator: {neck_bore: 5 mm, neck_length: 20 mm, volume: 50 cm3,"
+                + " resistance: 0.1}, at: {face: chamber.outer_fac, x: 400 mm, angles: [0 °]}}}\n"
+                + "walls:",
+            18,
+            "no face 'chamber.outer_fac'",
+            "chamber.outer_face"),
+        ring(
+            "walls:",
+            "dampers: {d: {quarter_wave: {bore: 20 mm, length: 200 mm, resistance: 0.1},"
+                + " at: {face: chamber.outer_face, x: 100 mm, angles: [0 °]}}}\nwalls:",
+            18,
+            "x lies outside zone 'chamber'",
+            "it runs from 300 mm to 610 mm"),
+        ring(
+            "walls:",
+            "dampers: {d: {quarter_wave: {bore: 20 mm, length: 200 mm},"
+                + " at: {edge: chamber.downstream, x: 100 mm}}}\nwalls:",
+            18,
+            "the key 'resistance' is missing",
+            "add"),
+        ring("walls:", "studies: {}\nwalls:", 18, "not supported in this version", "leave it out"),
         ring(
             "title: ring",
             "title: ring\ntitle: twice",

@@ -180,6 +180,28 @@ public final class Sizing {
     }
 
     /**
+     * Size about a spot, as round the mouth of a damper: {@code size} within {@code radius}, and
+     * growing from there.
+     *
+     * @param x of the spot in m
+     * @param y of the spot in m
+     * @param radius in m
+     * @param size in m
+     */
+    public Builder near(double x, double y, double radius, double size) {
+      positive(size, "the size near a spot");
+      DoubleBinaryOperator before = field;
+      double slope = growth;
+      field =
+          (px, py) -> {
+            double own = size + slope * Math.max(0, Math.hypot(px - x, py - y) - radius);
+            double other = before == null ? 0 : before.applyAsDouble(px, py);
+            return other > 0 ? Math.min(own, other) : own;
+          };
+      return this;
+    }
+
+    /**
      * Size in m wanted at each place (x, y) in m, besides the other rules; a pure function. Sampled
      * at nodes, so it should not vary faster than the growth.
      */
