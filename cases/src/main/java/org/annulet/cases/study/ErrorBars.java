@@ -67,6 +67,15 @@ final class ErrorBars {
     return bars;
   }
 
+  /**
+   * For each of the finest modes the index of its partner among the coarse ones; −1 without one.
+   */
+  static int[] partners(Level coarse, Level middle, Level fine) {
+    int[] toMiddle = match(fine, middle);
+    int[] toCoarse = match(middle, coarse);
+    return Arrays.stream(toMiddle).map(j -> j < 0 ? -1 : toCoarse[j]).toArray();
+  }
+
   private static int[] match(Level from, Level to) {
     record Couple(int from, int to, double distance) {}
     List<Couple> couples = new ArrayList<>();

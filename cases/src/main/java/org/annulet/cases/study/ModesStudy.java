@@ -17,6 +17,7 @@ import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
+import org.annulet.post.meaning.ModeLabel.Origin;
 import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.meaning.Results;
@@ -90,7 +91,7 @@ public final class ModesStudy {
   }
 
   /** An entry of the results, and the mode of the operator behind it. */
-  private record Listed(ModeView view, CaseProblem.Part part, Mode own) {}
+  private record Listed(ModeView view, CaseProblem.Part part, Mode own, Origin origin) {}
 
   private List<ModeEntry> withSensitivities(
       List<ModeEntry> entries, Found found, CaseProblem problem, List<String> notes) {
@@ -145,7 +146,11 @@ public final class ModesStudy {
   /**
    * Modes of one operator, those in the margin after those in the window, with their error bars.
    */
-  private record Solved(ModeSet set, List<Optional<MeshError>> bars, PreparedOperator prepared) {}
+  private record Solved(
+      ModeSet set,
+      List<Optional<MeshError>> bars,
+      List<Origin> origins,
+      PreparedOperator prepared) {}
 
   private Found search(List<CaseProblem> ladder) {
     CaseProblem problem = ladder.get(ladder.size() - 1);
@@ -184,8 +189,9 @@ public final class ModesStudy {
       for (int k = 0; k < modes.size(); k++) {
         List<Listed> list = k < set.modes().size() ? found.inside : found.outside;
         Mode own = modes.get(k);
+        Origin origin = all.get(i).origins.get(k);
         views(part, own, all.get(i).bars.get(k), mirror)
-            .forEach(view -> list.add(new Listed(view, part, own)));
+            .forEach(view -> list.add(new Listed(view, part, own, origin)));
       }
     }
     Comparator<Listed> order =
@@ -201,10 +207,12 @@ public final class ModesStudy {
     List<ErrorBars.Level> levels = new ArrayList<>();
     ModeSet set = null;
     PreparedOperator prepared = null;
+    PreparedOperator small = null;
     for (CaseProblem level : ladder) {
       AssembledProblem assembled = level.parts().get(part).assembled();
       boolean finest = level == ladder.get(ladder.size() - 1);
       prepared = new PreparedOperator(assembled.operator());
+      small = small == null ? prepared : small;
       set =
           ModeSearch.find(
               prepared,
@@ -217,7 +225,11 @@ public final class ModesStudy {
               modes,
               modes.stream().map(m -> places.of(assembled.expand(m.re(), m.im()))).toList()));
     }
-    return new Solved(set, ErrorBars.of(levels.get(0), levels.get(1), levels.get(2)), prepared);
+    return new Solved(
+        set,
+        ErrorBars.of(levels.get(0), levels.get(1), levels.get(2)),
+        Origins.of(small, levels, set.modes().size()),
+        prepared);
   }
 
   /** A coarse mesh moves modes over the window's edge, upwards above all. */
@@ -276,7 +288,9 @@ public final class ModesStudy {
     for (int i = 0; i < listed.size(); i++) {
       entries.add(
           new ModeEntry(
-              listed.get(i).view, labels.get(i), Optional.of(budget(listed.get(i), listed))));
+              listed.get(i).view,
+              labels.get(i).withOrigin(listed.get(i).origin),
+              Optional.of(budget(listed.get(i), listed))));
     }
     return entries;
   }

@@ -5,6 +5,7 @@ import static org.annulet.post.chart.Svg.escape;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.ModeEntry;
@@ -52,8 +53,18 @@ final class ModeDetails {
         && label.azimuthalOrder() > 0) {
       fact(b, "round the axis", "the picture is one cut; the field turns with e^{imθ}");
     }
+    origin(label).ifPresent(text -> fact(b, "without flames", text));
     fact(b, "verdict", e.view().mode().verdict().name().toLowerCase(Locale.ROOT).replace('_', ' '));
     b.append("</dl>\n");
+  }
+
+  private static Optional<String> origin(ModeLabel label) {
+    return switch (label.origin()) {
+      case NOT_TRACED -> Optional.empty();
+      case ACOUSTIC -> Optional.of("stays as an acoustic mode of the chamber");
+      case INTRINSIC -> Optional.of("vanishes: born by the flame's delay");
+      case AMBIGUOUS -> Optional.of("cannot be told: it passes a place where two modes exchange");
+    };
   }
 
   private static void fact(StringBuilder b, String name, String value) {

@@ -29,7 +29,7 @@ public final class ModesCsv {
     StringBuilder b = new StringBuilder();
     b.append("number,problem,azimuthal_order,label,frequency_hz,frequency_error_hz,")
         .append("growth_rate_per_s,growth_rate_error_per_s,multiplicity,zone,zone_energy_share,")
-        .append("axial_nodes,radial_nodes,stability,verdict,backward_error\n");
+        .append("axial_nodes,radial_nodes,origin,stability,verdict,backward_error\n");
     for (int i = 0; i < results.modes().size(); i++) {
       ModeEntry e = results.modes().get(i);
       List<String> row =
@@ -47,6 +47,7 @@ public final class ModesCsv {
               number(e.label().zoneShare()),
               Integer.toString(e.label().axialNodes()),
               Integer.toString(e.label().radialNodes()),
+              e.label().origin().name().toLowerCase(Locale.ROOT),
               e.stability().name().toLowerCase(Locale.ROOT),
               e.view().mode().verdict().name().toLowerCase(Locale.ROOT),
               number(e.view().mode().backwardError()));
