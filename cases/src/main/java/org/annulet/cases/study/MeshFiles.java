@@ -61,7 +61,9 @@ public final class MeshFiles {
     WholeFile.write(folder.resolve("mesh.svg"), MeshPicture.svg(mesh, view));
     WholeFile.write(
         folder.resolve("chamber.svg"),
-        Svg.standalone(ChamberPicture.of(mesh, view, List.of()).svg()));
+        Svg.standalone(
+            ChamberPicture.of(mesh, view, CaseConditions.markers(caseFile, mesh))
+                .withKey(mesh.zoneNames(), CaseConditions.of(caseFile, mesh))));
     WholeFile.write(folder.resolve("quality.txt"), report.toString());
     return report.toString().stripTrailing();
   }

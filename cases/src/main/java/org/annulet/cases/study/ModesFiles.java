@@ -54,7 +54,11 @@ public final class ModesFiles {
         Svg.standalone(SpectrumChart.svg(answer.results(), CHART_WIDTH, CHART_HEIGHT)));
     HtmlReport.write(
         folder.resolve("report.html"),
-        new ReportInput(answer.results(), answer.chamber(), facts(answer.caseFile()), List.of()));
+        new ReportInput(
+            answer.results(),
+            answer.chamber(),
+            facts(answer.caseFile()),
+            CaseConditions.markers(answer.caseFile(), answer.problem().shape().mesh())));
     int most = answer.caseFile().outputs().fieldFiles();
     List<ModeView> all = answer.results().modes().stream().map(ModeEntry::view).toList();
     List<ModeView> views =

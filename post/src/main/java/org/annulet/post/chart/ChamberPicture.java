@@ -27,6 +27,13 @@ public record ChamberPicture(
   private static final double TALLEST = 560;
   private static final double MARGIN = 16;
 
+  /** Mean width of a letter of the key in px. */
+  private static final double LETTER = 7;
+
+  /** Tints of zones where the page sets none. */
+  private static final List<String> TINTS =
+      List.of("#d9e4e6", "#ecd9d0", "#e8e2d6", "#dde3d3", "#e3dbe8", "#e6e6da");
+
   /** Draws a chamber. */
   public static ChamberPicture of(Mesh mesh, PlaneView view, List<Marker> markers) {
     Surface flat = Surface.flat(mesh);
@@ -65,18 +72,75 @@ public record ChamberPicture(
       outline.append(path);
       b.append("<path fill-rule=\"evenodd\" fill=\"var(--zone-")
           .append(z % 6)
-          .append(",#e8e2d6)\" stroke=\"var(--ink,#222)\" stroke-width=\"1.2\" d=\"")
+          .append(',')
+          .append(TINTS.get(z % 6))
+          .append(")\" stroke=\"var(--ink,#222)\" stroke-width=\"1.2\" d=\"")
           .append(path)
           .append("\"><title>")
           .append(Svg.escape(mesh.zoneNames().get(z)))
           .append("</title></path>\n");
     }
-    d.edges(b, mesh);
+    d.inner(b, mesh);
     for (Marker m : markers) {
       d.marker(b, m);
     }
+    d.edges(b, mesh);
     return new ChamberPicture(
         b.append("</svg>\n").toString(), mesh.edgeNames(), outline.toString(), frame, size);
+  }
+
+  /**
+   * The picture with a key below it: tints of the zones, and the edges by number with what holds on
+   * each.
+   *
+   * @param zones names of the zones, in the order of the mesh
+   * @param conditions what holds on each edge, in the order of {@link #edges()}
+   * @return an SVG element
+   */
+  public String withKey(List<String> zones, List<String> conditions) {
+    double line = 20;
+    int longest = 0;
+    for (int e = 0; e < edges.size(); e++) {
+      longest = Math.max(longest, edges.get(e).length() + conditions.get(e).length() + 6);
+    }
+    int columns = LETTER * longest < (size[0] - MARGIN) / 2 ? 2 : 1;
+    double column = (size[0] - MARGIN) / columns;
+    int rows = (edges.size() + columns - 1) / columns;
+    int zoneRows = (zones.size() + columns - 1) / columns;
+    double height = size[1] + (rows + zoneRows + 1) * line;
+    StringBuilder b = new StringBuilder();
+    for (int z = 0; z < zones.size(); z++) {
+      double x = MARGIN + z / zoneRows * column;
+      double y = size[1] + (z % zoneRows) * line;
+      b.append(
+          String.format(
+              Locale.ROOT,
+              "<rect x=\"%.2f\" y=\"%.2f\" width=\"14\" height=\"14\" fill=\"var(--zone-%d,%s)\""
+                  + " stroke=\"var(--ink,#222)\"/><text x=\"%.2f\" y=\"%.2f\""
+                  + " fill=\"var(--ink,#222)\">%s</text>%n",
+              x,
+              y,
+              z % 6,
+              TINTS.get(z % 6),
+              x + 22,
+              y + 12,
+              Svg.escape(zones.get(z))));
+    }
+    for (int e = 0; e < edges.size(); e++) {
+      double x = MARGIN + e / rows * column;
+      double y = size[1] + (zoneRows + e % rows + 0.6) * line + 8;
+      b.append(
+          String.format(
+              Locale.ROOT,
+              "<text x=\"%.2f\" y=\"%.2f\" fill=\"var(--ink,#222)\">%d  %s: %s</text>%n",
+              x,
+              y,
+              e + 1,
+              Svg.escape(edges.get(e)),
+              Svg.escape(conditions.get(e))));
+    }
+    String frameOf = "viewBox=\"0 0 " + at(size[0]) + " ";
+    return svg.replace(frameOf + at(size[1]), frameOf + at(height)).replace("</svg>", b + "</svg>");
   }
 
   /** Pen with a view and a frame. */
@@ -144,14 +208,8 @@ public record ChamberPicture(
       path.append(first ? "" : "Z");
     }
 
-    void edges(StringBuilder b, Mesh mesh) {
-      int n = mesh.edgeNames().size();
-      List<List<Integer>> of = new ArrayList<>();
-      for (int e = 0; e < n; e++) {
-        of.add(new ArrayList<>());
-      }
+    void inner(StringBuilder b, Mesh mesh) {
       for (int s = 0; s < mesh.segmentCount(); s++) {
-        of.get(mesh.segmentEdge(s)).add(s);
         if (mesh.segmentRight(s) != -1) {
           double[] p = segment(mesh, s);
           b.append(
@@ -165,9 +223,22 @@ public record ChamberPicture(
                   p[3]));
         }
       }
+    }
+
+    /** Numbered dots, each at another part of its edge so that parallel edges keep them apart. */
+    void edges(StringBuilder b, Mesh mesh) {
+      int n = mesh.edgeNames().size();
+      List<List<Integer>> of = new ArrayList<>();
+      for (int e = 0; e < n; e++) {
+        of.add(new ArrayList<>());
+      }
+      for (int s = 0; s < mesh.segmentCount(); s++) {
+        of.get(mesh.segmentEdge(s)).add(s);
+      }
       for (int e = 0; e < n; e++) {
         if (!of.get(e).isEmpty()) {
-          double[] p = segment(mesh, of.get(e).get(of.get(e).size() / 3));
+          double part = mesh.period() > 0 ? 0.1 + 0.8 * (0.618 * e % 1) : 1.0 / 3;
+          double[] p = segment(mesh, of.get(e).get((int) (part * of.get(e).size())));
           b.append(
               String.format(
                   Locale.ROOT,
