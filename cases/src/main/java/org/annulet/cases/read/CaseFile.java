@@ -19,6 +19,7 @@ import org.annulet.solver.modes.Window;
  * @param flames in the order of the file; may be empty
  * @param window where modes are wanted
  * @param azimuthalOrders orders m wanted on a section, increasing; empty for other kinds
+ * @param studies what-ifs asked for
  * @param outputs which files are written beside the tables
  * @param variants the same case with some values changed; may be empty
  * @param source where each value was read, and the text
@@ -35,6 +36,7 @@ public record CaseFile(
     List<Flame> flames,
     Window window,
     List<Integer> azimuthalOrders,
+    Studies studies,
     Outputs outputs,
     List<Variant> variants,
     CaseSource source) {
@@ -54,6 +56,26 @@ public record CaseFile(
    * @param caseFile the changed case; has no variants itself
    */
   public record Variant(String name, String about, CaseFile caseFile) {}
+
+  /** The same case with other dampers and no variants. */
+  public CaseFile withDampers(List<Damper> others) {
+    return new CaseFile(
+        file,
+        title,
+        about,
+        geometry,
+        gas,
+        walls,
+        twoPorts,
+        List.copyOf(others),
+        flames,
+        window,
+        azimuthalOrders,
+        studies,
+        outputs,
+        List.of(),
+        source);
+  }
 
   /** The wall of an edge or face; rigid when the case file does not name it. */
   public Wall wall(String edge) {

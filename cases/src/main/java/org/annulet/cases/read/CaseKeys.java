@@ -10,7 +10,8 @@ import java.util.Locale;
  */
 enum CaseKeys {
   CASE(
-      "annulet! title! about geometry! gas! walls two_ports dampers flames window! outputs variants"),
+      "annulet! title! about geometry! gas! walls two_ports dampers flames window! studies outputs"
+          + " variants"),
   RING("kind! burner_count! unrolled_radius mesh_size! mesh_size_at sides_per_wavelength zones!"),
   ANNULUS("name! shape! mean_radius! gap! length!"),
   DUCTS("name! shape! mean_radius! bore area length!"),
@@ -43,6 +44,10 @@ enum CaseKeys {
   RESPONSE("gain! delay!"),
   STAGING("burners! gain delay heat_share"),
   WINDOW("frequency! growth_rate azimuthal_orders"),
+  STUDIES("dampers"),
+  DAMPER_STUDY("designs! positions! frequency"),
+  DAMPER_DESIGN("resonator quarter_wave gas_of mouth_width count!"),
+  DAMPER_POSITIONS("face! x! angles burners taken"),
   OUTPUTS("field_files"),
   VARIANT("name! about set!");
 
@@ -55,7 +60,6 @@ enum CaseKeys {
           "impedance_table",
           "delay_spread",
           "response_table",
-          "studies",
           "uncertainty",
           "compare");
 

@@ -152,6 +152,12 @@ public final class CaseReader {
               "give the burners their pressure loss under 'two_ports', and the ends their impedance");
     }
     Optional<WindowReader> window = m.get("window").map(e -> WindowReader.read(e, shape));
+    Studies studies =
+        geometry.isPresent()
+            ? m.get("studies")
+                .map(new StudiesReader(shape, dampers, window)::read)
+                .orElse(Studies.NONE)
+            : Studies.NONE;
     CaseFile.Outputs outputs =
         m.get("outputs").map(CaseReader::outputs).orElse(new CaseFile.Outputs(Integer.MAX_VALUE));
     boolean clean = binder.clean();
@@ -171,6 +177,7 @@ public final class CaseReader {
                 flames,
                 window.orElseThrow().window(),
                 window.orElseThrow().orders(),
+                studies,
                 outputs,
                 variants,
                 binder.source(changes -> changed(root, changes, binder())));

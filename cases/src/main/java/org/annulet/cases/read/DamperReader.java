@@ -151,7 +151,7 @@ final class DamperReader {
         .orElse(List.of());
   }
 
-  private static void inside(Mapping m, Geometry.Ring ring, String zone, double x) {
+  static void inside(Mapping m, Geometry.Ring ring, String zone, double x) {
     double start = ring.start(zone);
     double end = start + ring.zone(zone).length();
     if (x <= start || x >= end) {

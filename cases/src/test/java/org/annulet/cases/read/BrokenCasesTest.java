@@ -148,7 +148,32 @@ class BrokenCasesTest {
             18,
             "the key 'resistance' is missing",
             "add"),
-        ring("walls:", "studies: {}\nwalls:", 18, "not supported in this version", "leave it out"),
+        ring("walls:", "compare: {}\nwalls:", 18, "not supported in this version", "leave it out"),
+        ring("walls:", "studies: {damper: {}}\nwalls:", 18, "unknown key 'damper'", "dampers"),
+        ring(
+            "walls:",
+            "studies: {dampers: {designs: {a: {count: 3, quarter_wave: {bore: 20 mm, length: 200 mm, resistance: 0.1}}}, positions: {face: chamber.outer_face, x: 400 mm, burners: [1, 3]}}}\nwalls:",
+            18,
+            "3 dampers for 2 free positions",
+            "more angles"),
+        ring(
+            "walls:",
+            "studies: {dampers: {designs: {a: {count: 1, quarter_wave: {bore: 20 mm, length: 200 mm, resistance: 0.1}}}, positions: {face: chamber.outer_face, x: 400 mm, angles: [0 °, 1 °]}}}\nwalls:",
+            18,
+            "two positions are 5.75959 mm apart, the mouths 17.7245 mm",
+            "move the positions apart"),
+        ring(
+            "walls:",
+            "studies: {dampers: {designs: {a: {count: 1, quarter_wave: {bore: 20 mm, length: 200 mm, resistance: 0.1}}}, frequency: [10 Hz, 500 Hz], positions: {face: chamber.outer_face, x: 400 mm, burners: all}}}\nwalls:",
+            18,
+            "the range of the modes to be tamed",
+            "within"),
+        ring(
+            "walls:",
+            "studies: {dampers: {designs: {a: {count: 1, quarter_wave: {bore: 20 mm, length: 200 mm, resistance: 0.1}}}, positions: {face: chamber.outer_face, x: 400 mm, burners: [1], taken: [2]}}}\nwalls:",
+            18,
+            "a place is taken that is not among the positions",
+            "leave it out"),
         ring(
             "title: ring",
             "title: ring\ntitle: twice",
