@@ -6,6 +6,8 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
+import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseSource;
@@ -16,7 +18,6 @@ import org.annulet.post.files.WholeFile;
 import org.annulet.post.meaning.Chamber;
 import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.ModeEntry;
-import org.annulet.post.meaning.ModeView;
 import org.annulet.post.report.Fact;
 import org.annulet.post.report.HtmlReport;
 import org.annulet.post.report.ReportInput;
@@ -33,6 +34,9 @@ public final class ModesFiles {
   private static final double CHART_HEIGHT = 520;
   private static final int SWEPT_FACETS = 72;
   private static final int MOST_SWEPT_POINTS = 400_000;
+
+  private static final int CYCLE_FRAMES = 12;
+  private static final int MOST_CYCLE_NODES = 100_000;
 
   private ModesFiles() {}
 
@@ -60,24 +64,34 @@ public final class ModesFiles {
             facts(answer.caseFile()),
             CaseConditions.markers(answer.caseFile(), answer.problem().shape().mesh())));
     int most = answer.caseFile().outputs().fieldFiles();
-    List<ModeView> all = answer.results().modes().stream().map(ModeEntry::view).toList();
-    List<ModeView> views =
-        all.size() <= most
-            ? all
-            : all.stream()
-                .sorted(Comparator.comparingDouble(v -> -v.mode().growthRate()))
-                .limit(most)
-                .toList();
-    Mesh mesh = answer.problem().shape().mesh();
+    List<ModeFiles.Numbered> views = views(answer.results().modes(), most);
     Chamber chamber = answer.chamber();
+    Mesh mesh = chamber.mesh();
     boolean ring = chamber.kind() == GeometryKind.RING;
     Surface surface = ring ? Surface.wrapped(mesh, chamber.zoneRadii()) : Surface.flat(mesh);
-    new ModeFiles(folder, mesh, surface).modes("mode", views);
+    new ModeFiles(folder, chamber, surface).modes("mode", views);
+    Optional<ModeEntry> worst =
+        answer.results().modes().stream()
+            .max(Comparator.comparingDouble(e -> e.view().mode().growthRate()));
+    if (worst.isPresent() && most > 0 && mesh.nodeCount() <= MOST_CYCLE_NODES) {
+      new ModeFiles(folder, chamber, surface).cycle("cycle", worst.get().view(), CYCLE_FRAMES);
+    }
     if (chamber.kind() == GeometryKind.SECTION
         && (long) mesh.nodeCount() * SWEPT_FACETS < MOST_SWEPT_POINTS) {
-      new ModeFiles(folder, mesh, Surface.swept(mesh, 2 * Math.PI, SWEPT_FACETS))
+      new ModeFiles(folder, chamber, Surface.swept(mesh, 2 * Math.PI, SWEPT_FACETS))
           .modes("swept", views);
     }
+  }
+
+  /** The modes to be written as fields: all, or those that grow fastest; by their number. */
+  private static List<ModeFiles.Numbered> views(List<ModeEntry> all, int most) {
+    return IntStream.range(0, all.size())
+        .boxed()
+        .sorted(Comparator.comparingDouble(i -> -all.get(i).view().mode().growthRate()))
+        .limit(most)
+        .sorted()
+        .map(i -> new ModeFiles.Numbered(i + 1, all.get(i).view(), all.get(i).maps()))
+        .toList();
   }
 
   private static List<Fact> facts(CaseFile caseFile) {
@@ -104,7 +118,7 @@ public final class ModesFiles {
     List<Path> old;
     try (Stream<Path> files = Files.list(folder)) {
       old =
-          files.filter(f -> f.getFileName().toString().matches("(mode|swept)-\\d+\\.vtu")).toList();
+          files.filter(f -> f.getFileName().toString().matches("(mode|swept|cycle)-\\d+\\.vtu")).toList();
     }
     for (Path f : old) {
       Files.delete(f);

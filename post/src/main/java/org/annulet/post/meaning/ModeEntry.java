@@ -11,25 +11,32 @@ import java.util.Optional;
  * @param budget growth budget, where it was made
  * @param sensitivities to the inputs of the case, the strongest effect on the growth rate first;
  *     empty where they were not computed
+ * @param maps where a damper acts and where the flames drive, where they were made
  */
 public record ModeEntry(
     ModeView view,
     ModeLabel label,
     Optional<GrowthBudget> budget,
-    List<ParameterSensitivity> sensitivities) {
+    List<ParameterSensitivity> sensitivities,
+    Optional<ModeMaps> maps) {
   /** Copies the list. */
   public ModeEntry {
     sensitivities = List.copyOf(sensitivities);
   }
 
-  /** Without sensitivities. */
+  /** Without sensitivities and maps. */
   public ModeEntry(ModeView view, ModeLabel label, Optional<GrowthBudget> budget) {
-    this(view, label, budget, List.of());
+    this(view, label, budget, List.of(), Optional.empty());
+  }
+
+  /** The same with maps. */
+  public ModeEntry with(ModeMaps made) {
+    return new ModeEntry(view, label, budget, sensitivities, Optional.of(made));
   }
 
   /** The same with sensitivities. */
   public ModeEntry with(List<ParameterSensitivity> all) {
-    return new ModeEntry(view, label, budget, all);
+    return new ModeEntry(view, label, budget, all, maps);
   }
 
   /** Rounding of a growth rate per |s|: sums over the mesh in double precision keep about this. */

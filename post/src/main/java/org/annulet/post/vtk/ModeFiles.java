@@ -5,29 +5,51 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.annulet.mesher.mesh.Mesh;
+import org.annulet.post.meaning.AcousticFlow;
+import org.annulet.post.meaning.Chamber;
+import org.annulet.post.meaning.ModeMaps;
 import org.annulet.post.meaning.ModeView;
 
 /**
  * The files of the modes of one mesh on one surface. All files of a collection have the same
- * arrays: p_real, p_imag, p_magnitude and p_phase_deg at the points, zone on the triangles; p̂ is
- * scaled so that its largest value is 1.
+ * arrays. At the points p_real, p_imag, p_magnitude and p_phase_deg, p̂ scaled so that its largest
+ * value is about 1 Pa, and where they were made damper_growth_per_s_per_m2 and drive_per_s_per_m3
+ * ({@link ModeMaps}); on the triangles zone, and for that p̂ velocity_real_m_per_s,
+ * velocity_imag_m_per_s and intensity_w_per_m2 in space, in single precision.
  */
 public final class ModeFiles {
   private final Path folder;
   private final Surface surface;
+  private final Chamber chamber;
   private final Mesh mesh;
+
+  /**
+   * A mode to be written.
+   *
+   * @param number of the mode in the tables, from 1
+   * @param view its field
+   * @param maps its maps; all modes of a collection have them, or none
+   */
+  public record Numbered(int number, ModeView view, Optional<ModeMaps> maps) {
+    /** Without maps. */
+    public static Numbered of(int number, ModeView view) {
+      return new Numbered(number, view, Optional.empty());
+    }
+  }
 
   /**
    * Files in a folder.
    *
    * @param folder made if absent
-   * @param mesh mesh of the fields
+   * @param chamber mesh of the fields, with its gas
    * @param surface what to show them on, made from that mesh
    */
-  public ModeFiles(Path folder, Mesh mesh, Surface surface) {
+  public ModeFiles(Path folder, Chamber chamber, Surface surface) {
     this.folder = folder;
-    this.mesh = mesh;
+    this.chamber = chamber;
+    this.mesh = chamber.mesh();
     this.surface = surface;
   }
 
@@ -38,24 +60,31 @@ public final class ModeFiles {
    *     mode, from 1
    * @throws IOException if the folder cannot be written
    */
-  public void modes(String stem, List<ModeView> modes) throws IOException {
+  public void modes(String stem, List<Numbered> modes) throws IOException {
     List<PvdFile.Member> members = new ArrayList<>();
-    for (int i = 0; i < modes.size(); i++) {
-      String name = String.format(Locale.ROOT, "%s-%02d.vtu", stem, i + 1);
-      double[][] p = field(modes.get(i));
+    for (Numbered mode : modes) {
+      String name = String.format(Locale.ROOT, "%s-%02d.vtu", stem, mode.number());
+      double[][] p = field(mode.view());
       double[] magnitude = new double[p[0].length];
       double[] phase = new double[p[0].length];
       for (int q = 0; q < phase.length; q++) {
         magnitude[q] = Math.hypot(p[0][q], p[1][q]);
         phase[q] = Math.toDegrees(Math.atan2(p[1][q], p[0][q]));
       }
-      file(modes.get(i))
-          .points("p_real", p[0])
-          .points("p_imag", p[1])
-          .points("p_magnitude", magnitude)
-          .points("p_phase_deg", phase)
-          .write(folder.resolve(name));
-      members.add(new PvdFile.Member(i + 1, name));
+      VtuFile file =
+          file(mode.view())
+              .points("p_real", p[0])
+              .points("p_imag", p[1])
+              .points("p_magnitude", magnitude)
+              .points("p_phase_deg", phase);
+      mode.maps()
+          .ifPresent(
+              maps ->
+                  file.points("damper_growth_per_s_per_m2", atPoints(maps.damper()))
+                      .points("drive_per_s_per_m3", atPoints(maps.drive())));
+      flow(file, mode.view());
+      file.write(folder.resolve(name));
+      members.add(new PvdFile.Member(mode.number(), name));
     }
     PvdFile.write(folder.resolve(stem + ".pvd"), members);
   }
@@ -88,6 +117,42 @@ public final class ModeFiles {
       members.add(new PvdFile.Member(degrees, name));
     }
     PvdFile.write(folder.resolve(stem + ".pvd"), members);
+  }
+
+  private double[] atPoints(double[] atNodes) {
+    double[] out = new double[surface.pointCount()];
+    for (int q = 0; q < out.length; q++) {
+      out[q] = atNodes[surface.node(q)];
+    }
+    return out;
+  }
+
+  private void flow(VtuFile file, ModeView view) {
+    AcousticFlow flow = AcousticFlow.of(chamber, view);
+    Directions directions = new Directions(mesh, surface);
+    int n = surface.triangleCount();
+    float[] re = new float[3 * n];
+    float[] im = new float[3 * n];
+    float[] intensity = new float[3 * n];
+    int m = surface.isSwept() && view.order() != null ? view.order() : 0;
+    for (int t = 0; t < n; t++) {
+      double[][] frame = directions.of(t);
+      int from = 3 * surface.sourceTriangle(t);
+      double c = m == 0 ? 1 : Math.cos(m * surface.angle(t));
+      double s = m == 0 ? 0 : Math.sin(m * surface.angle(t));
+      for (int k = 0; k < 3; k++) {
+        for (int axis = 0; axis < 3; axis++) {
+          double x = flow.re()[from + k];
+          double y = flow.im()[from + k];
+          re[3 * t + axis] += (float) ((c * x - s * y) * frame[k][axis]);
+          im[3 * t + axis] += (float) ((s * x + c * y) * frame[k][axis]);
+          intensity[3 * t + axis] += (float) (flow.intensity()[from + k] * frame[k][axis]);
+        }
+      }
+    }
+    file.cells("velocity_real_m_per_s", re, 3)
+        .cells("velocity_imag_m_per_s", im, 3)
+        .cells("intensity_w_per_m2", intensity, 3);
   }
 
   private VtuFile file(ModeView view) {

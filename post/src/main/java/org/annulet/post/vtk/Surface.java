@@ -17,8 +17,14 @@ public final class Surface {
   private final int[] node;
   private final int[] source;
   private final double[] turn;
+  private final boolean swept;
 
   private Surface(Collector c) {
+    this(c, false);
+  }
+
+  private Surface(Collector c, boolean swept) {
+    this.swept = swept;
     points = Arrays.copyOf(c.points, 3 * c.pointCount);
     node = Arrays.copyOf(c.node, c.pointCount);
     turn = Arrays.copyOf(c.turn, c.pointCount);
@@ -128,7 +134,7 @@ public final class Surface {
         }
       }
     }
-    return new Surface(c);
+    return new Surface(c, true);
   }
 
   /** Step k of a sweep, each of the given angle in rad. */
@@ -195,6 +201,22 @@ public final class Surface {
   /** Angle in rad by which point {@code p} was turned about the axis (for e^{imθ}). */
   public double turn(int p) {
     return turn[p];
+  }
+
+  /** Whether the surface is a section swept round, so that the field turns with e^{imθ}. */
+  boolean isSwept() {
+    return swept;
+  }
+
+  /** Angle of the middle of triangle {@code t} about the axis, in rad. */
+  double angle(int t) {
+    double y = 0;
+    double z = 0;
+    for (int k = 0; k < 3; k++) {
+      y += coordinate(corner(t, k), 1);
+      z += coordinate(corner(t, k), 2);
+    }
+    return Math.atan2(z, y);
   }
 
   double[] points() {

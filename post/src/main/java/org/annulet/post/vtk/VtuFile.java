@@ -111,6 +111,19 @@ public final class VtuFile {
     return this;
   }
 
+  /**
+   * Adds numbers in single precision for each triangle.
+   *
+   * @param values shape [triangles of the surface × components]
+   */
+  public VtuFile cells(String name, float[] values, int components) {
+    check(name, values.length, surface.triangleCount() * components);
+    ByteBuffer b = ByteBuffer.allocate(4 * values.length).order(ByteOrder.LITTLE_ENDIAN);
+    b.asFloatBuffer().put(values);
+    cellData.append(array("Float32", name, components, b.array()));
+    return this;
+  }
+
   private static void check(String name, int got, int expected) {
     if (got != expected) {
       throw new IllegalArgumentException(

@@ -13,7 +13,10 @@ import java.util.Map;
 import java.util.concurrent.TimeUnit;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.Meshes;
+import org.annulet.post.meaning.Chamber;
+import org.annulet.post.meaning.ModeMaps;
 import org.annulet.post.meaning.ModeView;
+import org.apache.commons.math3.complex.Complex;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -87,7 +90,8 @@ class VtkReadBackTest {
             (x, y) -> Math.cos(3 * x) * y,
             (x, y) -> Math.sin(x + y));
     Surface surface = Surface.flat(mesh);
-    new ModeFiles(folder, mesh, surface).modes("mode", List.of(view));
+    new ModeFiles(folder, chamber(mesh), surface)
+        .modes("mode", List.of(ModeFiles.Numbered.of(1, view)));
     Map<String, String> got = read(folder.resolve("mode-01.vtu"));
     double[] xyz = numbers(got.get("points"));
     double[] re = numbers(got.get("p_real"));
@@ -119,12 +123,145 @@ class VtkReadBackTest {
     assertThat(numbers(got.get("growth_rate_per_s"))).containsExactly(-7.25);
   }
 
+  private static final double RHO = 1.7;
+  private static final double SOUND = 420;
+
+  /** Plane or section of uniform gas. */
+  private static Chamber chamber(Mesh mesh) {
+    return withGas(Chamber.section(mesh));
+  }
+
+  private static Chamber withGas(Chamber chamber) {
+    double[] density = new double[chamber.mesh().triangleCount()];
+    double[] modulus = new double[density.length];
+    java.util.Arrays.fill(density, RHO);
+    java.util.Arrays.fill(modulus, RHO * SOUND * SOUND);
+    return chamber.withGas(density, modulus);
+  }
+
+  /** ∇(y + iz) = (0, 1, i), so û = −(0, 1, i)/(sρ) everywhere and exactly. */
+  @Test
+  void velocityOfASweptSection_isTheGradientInSpace() throws Exception {
+    Mesh mesh = Meshes.rectangle(new double[] {1, 0, 0.5}, 6, 4, "gas");
+    ModeView view = Meshes.mode(mesh, new double[] {100, 30}, 1, (x, r) -> r, (x, r) -> 0);
+    new ModeFiles(folder, chamber(mesh), Surface.swept(mesh, 1.5 * Math.PI, 12))
+        .modes("turned", List.of(ModeFiles.Numbered.of(7, view)));
+    Map<String, String> got = read(folder.resolve("turned-07.vtu"));
+    double[] re = numbers(got.get("velocity_real_m_per_s"));
+    double[] im = numbers(got.get("velocity_imag_m_per_s"));
+    Complex s = new Complex(30, 2 * Math.PI * 100);
+    Complex u = s.multiply(-RHO).reciprocal();
+    double bound = 1e-6 * u.abs(); // single precision
+    for (int t = 0; t < re.length / 3; t++) {
+      assertThat(re[3 * t]).isCloseTo(0, within(bound));
+      assertThat(re[3 * t + 1]).isCloseTo(u.getReal(), within(bound));
+      assertThat(im[3 * t + 1]).isCloseTo(u.getImaginary(), within(bound));
+      assertThat(re[3 * t + 2]).isCloseTo(-u.getImaginary(), within(bound));
+      assertThat(im[3 * t + 2]).isCloseTo(u.getReal(), within(bound));
+    }
+    assertThat(Files.readString(folder.resolve("turned.pvd"))).contains("timestep=\"7.0\"");
+  }
+
+  /** A wave e^{i(kx + lθR)} on a ring runs with the phase velocity against both wavenumbers. */
+  @Test
+  void intensityOfAWaveOnAWrappedRing_isTangentialAndOfTheClosedForm() throws Exception {
+    double radius = 0.4;
+    Mesh mesh = Meshes.ring(0.5, 2 * Math.PI * 0.5, 40, 240, "chamber"); // unrolled at 0.5 m
+    double k = 2;
+    int order = 3;
+    ModeView view =
+        Meshes.mode(
+            mesh,
+            new double[] {150, 0},
+            null,
+            (x, y) -> Math.cos(k * x + order * y / 0.5),
+            (x, y) -> Math.sin(k * x + order * y / 0.5));
+    Chamber ring = withGas(Chamber.ring(mesh, new double[] {radius}));
+    Surface surface = Surface.wrapped(mesh, new double[] {radius});
+    new ModeFiles(folder, ring, surface).modes("ring", List.of(ModeFiles.Numbered.of(1, view)));
+    double[] intensity = numbers(read(folder.resolve("ring-01.vtu")).get("intensity_w_per_m2"));
+    double unit = -0.5 / (2 * Math.PI * 150 * RHO); // I = −½ (wavenumber)/(ωρ)
+    double bound = 6e-3 * Math.abs(unit) * order / radius; // a facet's middle is 2π/240/6 off
+    for (int t = 0; t < surface.triangleCount(); t++) {
+      double a = surface.angle(t);
+      assertThat(intensity[3 * t]).isCloseTo(unit * k, within(bound));
+      double round = unit * order / radius;
+      assertThat(intensity[3 * t + 1]).isCloseTo(-Math.sin(a) * round, within(bound));
+      assertThat(intensity[3 * t + 2]).isCloseTo(Math.cos(a) * round, within(bound));
+    }
+  }
+
+  /** p = cos kx: û = k sin kx/(iωρ), no mean flow of energy. A wave to the right: I = 1/(2ρc). */
+  @Test
+  void standingAndTravellingWaveInADuct_haveTheirVelocityAndIntensity() throws Exception {
+    Mesh mesh = Meshes.rectangle(new double[] {1, 0, 0.1}, 200, 3, "gas");
+    double f = SOUND; // k = 2π/m
+    Chamber duct = withGas(Chamber.plane(mesh));
+    ModeView standing =
+        Meshes.mode(
+            mesh, new double[] {f, 0}, null, (x, y) -> Math.cos(2 * Math.PI * x), (x, y) -> 0);
+    ModeView running =
+        Meshes.mode(
+            mesh,
+            new double[] {f, 0},
+            null,
+            (x, y) -> Math.cos(2 * Math.PI * x),
+            (x, y) -> -Math.sin(2 * Math.PI * x));
+    Surface flat = Surface.flat(mesh);
+    new ModeFiles(folder, duct, flat)
+        .modes(
+            "duct", List.of(ModeFiles.Numbered.of(1, standing), ModeFiles.Numbered.of(2, running)));
+    Map<String, String> one = read(folder.resolve("duct-01.vtu"));
+    Map<String, String> two = read(folder.resolve("duct-02.vtu"));
+    double[] im = numbers(one.get("velocity_imag_m_per_s"));
+    double[] still = numbers(one.get("intensity_w_per_m2"));
+    double[] moving = numbers(two.get("intensity_w_per_m2"));
+    double u = 1 / (RHO * SOUND);
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      double middle = 0;
+      for (int c = 0; c < 3; c++) {
+        middle += mesh.cornerX(t, c) / 3;
+      }
+      // the slope of a linear element is that of the side's middle: h/6 from the triangle's
+      assertThat(im[3 * t]).isCloseTo(-u * Math.sin(2 * Math.PI * middle), within(6e-3 * u));
+      assertThat(still[3 * t]).isCloseTo(0, within(1e-9 * u));
+      assertThat(moving[3 * t]).isCloseTo(0.5 * u, within(1e-3 * u));
+      assertThat(moving[3 * t + 1]).isCloseTo(0, within(1e-3 * u));
+    }
+  }
+
+  @Test
+  void mapsOfAMode_readBackAtThePoints() throws Exception {
+    Mesh mesh = Meshes.rectangle(new double[] {1, 0, 0.1}, 6, 3, "gas");
+    ModeView view = Meshes.mode(mesh, new double[] {100, 0}, null, (x, y) -> x, (x, y) -> 0);
+    double[] damper = new double[mesh.nodeCount()];
+    double[] drive = new double[mesh.nodeCount()];
+    for (int v = 0; v < damper.length; v++) {
+      damper[v] = v % 5 == 0 ? Double.NaN : -0.5 * v;
+      drive[v] = 3 + v;
+    }
+    Surface flat = Surface.flat(mesh);
+    new ModeFiles(folder, chamber(mesh), flat)
+        .modes(
+            "maps",
+            List.of(
+                new ModeFiles.Numbered(
+                    1, view, java.util.Optional.of(new ModeMaps(damper, drive)))));
+    Map<String, String> got = read(folder.resolve("maps-01.vtu"));
+    double[] a = numbers(got.get("damper_growth_per_s_per_m2").replace("nan", "NaN"));
+    double[] b = numbers(got.get("drive_per_s_per_m3"));
+    for (int p = 0; p < a.length; p++) {
+      assertThat(Double.compare(a[p], damper[flat.node(p)])).isZero(); // NaN included
+      assertThat(b[p]).isEqualTo(drive[flat.node(p)]);
+    }
+  }
+
   @Test
   void cycle_isTheRealPartTurnedByThePhase() throws Exception {
     Mesh mesh = Meshes.rectangle(new double[] {1, 0, 1}, 3, 3, "gas");
     ModeView view = Meshes.mode(mesh, new double[] {100, 0}, null, (x, y) -> x, (x, y) -> 2 * y);
     Surface surface = Surface.flat(mesh);
-    new ModeFiles(folder, mesh, surface).cycle("turn", view, 4);
+    new ModeFiles(folder, chamber(mesh), surface).cycle("turn", view, 4);
     double[] quarter = numbers(read(folder.resolve("turn-001.vtu")).get("p"));
     for (int p = 0; p < quarter.length; p++) {
       // Re((a + ib)·i) = −b
@@ -185,7 +322,8 @@ class VtkReadBackTest {
     Surface open = Surface.swept(mesh, 1.5 * Math.PI, 54);
     ModeView view =
         Meshes.mode(mesh, new double[] {100, 0}, 2, (x, r) -> r * r, (x, r) -> r * r / 2);
-    new ModeFiles(folder, mesh, open).modes("swept", List.of(view));
+    new ModeFiles(folder, chamber(mesh), open)
+        .modes("swept", List.of(ModeFiles.Numbered.of(1, view)));
     Map<String, String> got = read(folder.resolve("swept-01.vtu"));
     double[] xyz = numbers(got.get("points"));
     double[] re = numbers(got.get("p_real"));
