@@ -118,7 +118,9 @@ public final class ModesFiles {
     List<Path> old;
     try (Stream<Path> files = Files.list(folder)) {
       old =
-          files.filter(f -> f.getFileName().toString().matches("(mode|swept|cycle)-\\d+\\.vtu")).toList();
+          files
+              .filter(f -> f.getFileName().toString().matches("(mode|swept|cycle)-\\d+\\.vtu"))
+              .toList();
     }
     for (Path f : old) {
       Files.delete(f);
