@@ -18,12 +18,14 @@ import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
 import org.annulet.post.meaning.ModeLabel.Origin;
+import org.annulet.post.meaning.ModeMaps;
 import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.assembly.AssembledProblem;
 import org.annulet.solver.assembly.NodalField;
 import org.annulet.solver.assembly.Ring;
+import org.annulet.solver.derivative.ModeDerivative;
 import org.annulet.solver.eigen.ModeSearch;
 import org.annulet.solver.eigen.PreparedOperator;
 import org.annulet.solver.eigen.SearchSettings;
@@ -73,7 +75,7 @@ public final class ModesStudy {
     Chamber chamber = GasVolume.of(problem);
     List<String> notes = new ArrayList<>();
     notes.add(problem.method());
-    List<ModeEntry> inside = withSensitivities(label(chamber, found.inside), found, problem, notes);
+    List<ModeEntry> inside = withDerivatives(label(chamber, found.inside), found, chamber, notes);
     List<ModeEntry> outside = label(chamber, found.outside);
     if (problem.shape().geometry() instanceof Ring ring) {
       ThinGap.sentence(ring, inside, chamber.mesh().zoneNames()).ifPresent(notes::add);
@@ -93,20 +95,14 @@ public final class ModesStudy {
   /** An entry of the results, and the mode of the operator behind it. */
   private record Listed(ModeView view, CaseProblem.Part part, Mode own, Origin origin) {}
 
-  private List<ModeEntry> withSensitivities(
-      List<ModeEntry> entries, Found found, CaseProblem problem, List<String> notes) {
-    progress.step("sensitivities", 0, 1);
-    Sensitivities study = new Sensitivities(caseFile, problem);
-    Set<Mode> seen = Collections.newSetFromMap(new IdentityHashMap<>());
-    for (Listed l : found.inside) {
-      if (!seen.contains(l.own)) {
-        List<Mode> members = members(l, found.inside);
-        seen.addAll(members);
-        int part = problem.parts().indexOf(l.part);
-        study.add(part, found.prepared.get(part), members);
-      }
-    }
+  /** The entries with what moves them and where something can be done about them. */
+  private List<ModeEntry> withDerivatives(
+      List<ModeEntry> entries, Found found, Chamber chamber, List<String> notes) {
+    progress.step("sensitivities and maps", 0, 1);
+    List<DerivedModes> groups = derived(found);
+    Sensitivities study = new Sensitivities(caseFile, found.problem, groups);
     Map<Mode, List<ParameterSensitivity>> tables = study.run();
+    Map<Mode, ModeMaps> maps = new Maps(found.problem, chamber).of(groups);
     if (!study.leftOut().isEmpty()) {
       notes.add(
           "Sensitivities leave out what cannot be varied by itself on the same mesh: "
@@ -115,9 +111,30 @@ public final class ModesStudy {
     }
     List<ModeEntry> out = new ArrayList<>();
     for (int i = 0; i < entries.size(); i++) {
-      out.add(entries.get(i).with(tables.getOrDefault(found.inside.get(i).own, List.of())));
+      Mode own = found.inside.get(i).own;
+      out.add(entries.get(i).with(tables.get(own)).with(maps.get(own)));
     }
     return out;
+  }
+
+  private static List<DerivedModes> derived(Found found) {
+    Set<Mode> seen = Collections.newSetFromMap(new IdentityHashMap<>());
+    List<Listed> first = new ArrayList<>();
+    for (Listed l : found.inside) {
+      if (!seen.contains(l.own)) {
+        first.add(l);
+        seen.addAll(members(l, found.inside));
+      }
+    }
+    return first.parallelStream()
+        .map(
+            l -> {
+              int part = found.problem.parts().indexOf(l.part);
+              List<Mode> members = members(l, found.inside);
+              return new DerivedModes(
+                  part, members, ModeDerivative.of(found.prepared.get(part), members));
+            })
+        .toList();
   }
 
   /** The modes of one eigenvalue of one operator. */
@@ -137,10 +154,15 @@ public final class ModesStudy {
   }
 
   private static final class Found {
+    final CaseProblem problem;
     final List<Certificate> certificates = new ArrayList<>();
     final List<Listed> inside = new ArrayList<>();
     final List<Listed> outside = new ArrayList<>();
     final List<PreparedOperator> prepared = new ArrayList<>();
+
+    Found(CaseProblem problem) {
+      this.problem = problem;
+    }
   }
 
   /**
@@ -171,7 +193,7 @@ public final class ModesStudy {
                 })
             .toList();
     Optional<MirrorImage> mirror = problem.shape().cells().map(MirrorImage::new);
-    Found found = new Found();
+    Found found = new Found(problem);
     for (int i = 0; i < n; i++) {
       CaseProblem.Part part = problem.parts().get(i);
       ModeSet set = all.get(i).set;

@@ -12,9 +12,7 @@ import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseSource;
 import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.solver.derivative.DifferenceOfOperators;
-import org.annulet.solver.derivative.ModeDerivative;
 import org.annulet.solver.derivative.Slope;
-import org.annulet.solver.eigen.PreparedOperator;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.operator.AcousticOperator;
 
@@ -29,32 +27,22 @@ final class Sensitivities {
 
   private final CaseFile caseFile;
   private final CaseProblem problem;
-  private final List<Group> groups = new ArrayList<>();
+  private final List<DerivedModes> groups;
   private final List<String> leftOut = new ArrayList<>();
-
-  /** Modes of one eigenvalue of one operator. */
-  private record Group(int part, PreparedOperator prepared, List<Mode> members) {}
 
   /** One row of a mode's table while it is being filled. */
   private record Effect(Mode mode, ParameterSensitivity row) {}
 
   /**
-   * Begins with no mode.
+   * Of some modes.
    *
    * @param problem the case on its finest mesh
+   * @param groups modes of that problem
    */
-  Sensitivities(CaseFile caseFile, CaseProblem problem) {
+  Sensitivities(CaseFile caseFile, CaseProblem problem, List<DerivedModes> groups) {
     this.caseFile = caseFile;
     this.problem = problem;
-  }
-
-  /**
-   * Adds the modes of one eigenvalue: one, or the members of an exact pair.
-   *
-   * @param part index of the operator in the problem
-   */
-  void add(int part, PreparedOperator prepared, List<Mode> members) {
-    groups.add(new Group(part, prepared, List.copyOf(members)));
+    this.groups = List.copyOf(groups);
   }
 
   /** Numbers that enter the operators but could not be varied by themselves; after the run. */
@@ -64,14 +52,10 @@ final class Sensitivities {
 
   /** The table of every mode, the strongest effect on the growth rate first. */
   Map<Mode, List<ParameterSensitivity>> run() {
-    List<ModeDerivative> derivatives =
-        groups.parallelStream().map(g -> ModeDerivative.of(g.prepared, g.members)).toList();
     List<Optional<List<Effect>>> all =
-        InputChange.candidates(caseFile).parallelStream()
-            .map(v -> effects(v, derivatives))
-            .toList();
+        InputChange.candidates(caseFile).parallelStream().map(this::effects).toList();
     Map<Mode, List<ParameterSensitivity>> tables = new IdentityHashMap<>();
-    groups.forEach(g -> g.members.forEach(m -> tables.put(m, new ArrayList<>())));
+    groups.forEach(g -> g.members().forEach(m -> tables.put(m, new ArrayList<>())));
     all.stream()
         .flatMap(Optional::stream)
         .flatMap(Collection::stream)
@@ -82,7 +66,7 @@ final class Sensitivities {
     return tables;
   }
 
-  private Optional<List<Effect>> effects(CaseSource.Value value, List<ModeDerivative> derivatives) {
+  private Optional<List<Effect>> effects(CaseSource.Value value) {
     Optional<InputChange> change = InputChange.of(caseFile, value);
     if (change.isEmpty()) {
       note(value);
@@ -91,18 +75,20 @@ final class Sensitivities {
     CaseProblem smaller = CaseProblem.on(change.get().smaller(), problem.shape());
     CaseProblem larger = CaseProblem.on(change.get().larger(), problem.shape());
     List<Effect> effects = new ArrayList<>();
-    for (int k = 0; k < groups.size(); k++) {
-      Group g = groups.get(k);
+    for (DerivedModes g : groups) {
       if (!comparable(g, smaller) || !comparable(g, larger)) {
         note(value);
         return Optional.empty();
       }
       DifferenceOfOperators difference =
           new DifferenceOfOperators(
-              g.prepared, operator(smaller, g.part), operator(larger, g.part), InputChange.STEP);
-      List<Slope> slopes = derivatives.get(k).slopes(difference);
+              g.derivative().prepared(),
+              operator(smaller, g.part()),
+              operator(larger, g.part()),
+              InputChange.STEP);
+      List<Slope> slopes = g.derivative().slopes(difference);
       for (int j = 0; j < slopes.size(); j++) {
-        effect(g.members.get(j), value, slopes.get(j)).ifPresent(effects::add);
+        effect(g.members().get(j), value, slopes.get(j)).ifPresent(effects::add);
       }
     }
     return Optional.of(effects);
@@ -114,9 +100,10 @@ final class Sensitivities {
     }
   }
 
-  private boolean comparable(Group g, CaseProblem changed) {
+  private boolean comparable(DerivedModes g, CaseProblem changed) {
     return changed.parts().size() == problem.parts().size()
-        && DifferenceOfOperators.comparable(g.prepared.operator(), operator(changed, g.part));
+        && DifferenceOfOperators.comparable(
+            g.derivative().prepared().operator(), operator(changed, g.part()));
   }
 
   private static AcousticOperator operator(CaseProblem problem, int part) {

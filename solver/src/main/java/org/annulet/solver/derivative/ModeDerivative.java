@@ -94,6 +94,11 @@ public final class ModeDerivative {
     return new ModeDerivative(prepared, sum.divide(re.length), ComplexMatrix.onColumns(re, im));
   }
 
+  /** The operator, analysed. */
+  public PreparedOperator prepared() {
+    return prepared;
+  }
+
   /** The eigenvalue in 1/s. */
   public Complex eigenvalue() {
     return s;
