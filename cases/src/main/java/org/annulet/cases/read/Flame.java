@@ -10,7 +10,7 @@ import java.util.OptionalDouble;
  * @param heatRelease mean, all burners together, in W
  * @param place where the heat is released
  * @param reference where the velocity is taken that it answers to
- * @param referenceVelocity mean velocity there in m/s
+ * @param referenceVelocity mean velocity there in m/s; NaN for a flame that answers to pressure
  * @param response (q̂/Q̄)/(û/ū)
  * @param staging exceptions for single burners, later ones win
  */
@@ -78,6 +78,24 @@ public record Flame(
       String zone, double from, double to, double width, double directionX, double directionY)
       implements Reference {}
 
+  /**
+   * Mean pressure on an edge: the flame answers (q̂/Q̄)/(p̂/p̄).
+   *
+   * @param edge name of the edge
+   */
+  public record EdgePressure(String edge) implements Reference {}
+
+  /**
+   * Mean pressure over a patch, as in {@link Patch}.
+   *
+   * @param zone name of the zone
+   * @param from smallest x in m; −∞ for the whole zone
+   * @param to largest x in m; +∞ for the whole zone
+   * @param width as in {@link Spread}
+   */
+  public record PatchPressure(String zone, double from, double to, double width)
+      implements Reference {}
+
   /** Flame response over s. */
   public sealed interface Response {}
 
@@ -90,6 +108,49 @@ public record Flame(
   public record GainDelay(double gain, double delay) implements Response {}
 
   /**
+   * Delays spread as a normal distribution: F(s) = n e^{−sτ + s²σ²/2}.
+   *
+   * @param gain n
+   * @param delay mean τ in s, not negative
+   * @param deviation σ in s, not negative
+   */
+  public record SpreadDelay(double gain, double delay, double deviation) implements Response {}
+
+  /**
+   * A delayed response through a first-order low-pass: F(s) = n e^{−sτ}/(1 + s/2πf).
+   *
+   * @param gain n
+   * @param delay τ in s, not negative
+   * @param cutoff f in Hz, positive
+   */
+  public record LowPass(double gain, double delay, double cutoff) implements Response {}
+
+  /**
+   * Several delayed responses side by side.
+   *
+   * @param parts at least one
+   */
+  public record DelaySum(List<GainDelay> parts) implements Response {}
+
+  /** What is known of F at zero frequency. */
+  public enum Limit {
+    /** F(0) = 1. */
+    PREMIXED,
+    /** F(0) = 0. */
+    TECHNICALLY_PREMIXED,
+    /** What the table says. */
+    AS_MEASURED
+  }
+
+  /**
+   * A table over frequency.
+   *
+   * @param table F at s = 2πi f
+   * @param limit at zero frequency
+   */
+  public record Measured(FrequencyTable table, Limit limit) implements Response {}
+
+  /**
    * What differs at some burners.
    *
    * @param burners counted from 1
@@ -100,18 +161,29 @@ public record Flame(
   public record StagedBurners(
       List<Integer> burners, OptionalDouble gain, OptionalDouble delay, OptionalDouble heatShare) {}
 
-  /** Gain and delay at a burner, counted from 1, with its exceptions. */
-  public GainDelay responseAt(int burner) {
-    GainDelay rule = (GainDelay) response;
-    double gain = rule.gain();
-    double delay = rule.delay();
+  /** Response at a burner, counted from 1, with its exceptions. */
+  public Response responseAt(int burner) {
+    Response here = response;
     for (StagedBurners e : staging) {
       if (e.burners().contains(burner)) {
-        gain = e.gain().orElse(gain);
-        delay = e.delay().orElse(delay);
+        here = changed(here, e.gain(), e.delay());
       }
     }
-    return new GainDelay(gain, delay);
+    return here;
+  }
+
+  /** The response with another gain or delay; sums and tables have none of their own. */
+  private static Response changed(Response r, OptionalDouble gain, OptionalDouble delay) {
+    if (r instanceof GainDelay n) {
+      return new GainDelay(gain.orElse(n.gain()), delay.orElse(n.delay()));
+    }
+    if (r instanceof SpreadDelay n) {
+      return new SpreadDelay(gain.orElse(n.gain()), delay.orElse(n.delay()), n.deviation());
+    }
+    if (r instanceof LowPass n) {
+      return new LowPass(gain.orElse(n.gain()), delay.orElse(n.delay()), n.cutoff());
+    }
+    return r;
   }
 
   /** Heat release at a burner, counted from 1, over that of the rule, with its exceptions. */

@@ -34,12 +34,17 @@ final class FlameReader {
 
   private void flame(String name, Mapping m, List<Flame> flames) {
     double heat = m.number("heat_release", QuantityKind.POWER, Range.POSITIVE);
-    double velocity = m.number("reference_velocity", QuantityKind.SPEED, Range.POSITIVE);
     Optional<Flame.Place> place = m.get("place").flatMap(this::place);
     Optional<Flame.Reference> reference =
         m.get("reference").map(this::reference).orElseGet(() -> presetReference(m, place));
-    Optional<Flame.GainDelay> response = m.get("response").map(FlameReader::response);
-    List<Flame.StagedBurners> staging = m.get("staging").map(this::staging).orElse(List.of());
+    boolean pressure =
+        reference.isPresent()
+            && (reference.get() instanceof Flame.EdgePressure
+                || reference.get() instanceof Flame.PatchPressure);
+    double velocity = velocity(m, pressure);
+    Optional<Flame.Response> response = m.get("response").flatMap(ResponseReader::read);
+    List<Flame.StagedBurners> staging =
+        m.get("staging").map(e -> staging(e, response)).orElse(List.of());
     if (place.isPresent() && reference.isPresent()) {
       pointwise(m, place.get(), reference.get());
       if (response.isPresent()) {
@@ -47,6 +52,20 @@ final class FlameReader {
             new Flame(name, heat, place.get(), reference.get(), velocity, response.get(), staging));
       }
     }
+  }
+
+  private static double velocity(Mapping m, boolean pressure) {
+    if (pressure && m.has("reference_velocity")) {
+      m.at("reference_velocity")
+          .fault("a flame that answers to pressure has no reference velocity", "leave it out");
+    }
+    if (!pressure && !m.has("reference_velocity")) {
+      m.entry()
+          .fault(
+              "the key 'reference_velocity' is missing",
+              "add the mean velocity the response refers to, as in 57 m/s");
+    }
+    return m.number("reference_velocity", QuantityKind.SPEED, Range.POSITIVE, Double.NaN);
   }
 
   private void pointwise(Mapping m, Flame.Place place, Flame.Reference reference) {
@@ -113,12 +132,26 @@ final class FlameReader {
     if (way.isEmpty()) {
       return Optional.empty();
     }
+    boolean pressure =
+        m.get("quantity")
+            .flatMap(e -> e.choice(List.of("velocity", "pressure")))
+            .equals(Optional.of("pressure"));
+    if (way.get().equals("edge") && pressure) {
+      only(m, List.of("edge", "quantity"));
+      Entry edge = m.get("edge").orElseThrow();
+      return (names.known() ? edge.nameOf("edge", names.all()) : edge.text())
+          .map(Flame.EdgePressure::new);
+    }
     if (way.get().equals("edge")) {
-      only(m, List.of("edge", "flow_from"));
+      only(m, List.of("edge", "flow_from", "quantity"));
       return innerEdge(m.get("edge").orElseThrow())
           .flatMap(e -> upstream(e, m).map(z -> new Flame.EdgeFlux(e, z)));
     }
-    only(m, List.of("zone", "from", "to", "distance", "width", "direction"));
+    if (pressure) {
+      only(m, List.of("zone", "from", "to", "distance", "width", "quantity"));
+      return stretch(m).map(s -> new Flame.PatchPressure(s.zone, s.from, s.to, s.width));
+    }
+    only(m, List.of("zone", "from", "to", "distance", "width", "direction", "quantity"));
     double[] direction = {1, 0};
     Optional<Entry> given = m.get("direction");
     if (given.isPresent()) {
@@ -272,17 +305,7 @@ final class FlameReader {
     };
   }
 
-  private static Flame.GainDelay response(Entry entry) {
-    Mapping m = Mapping.of(entry, CaseKeys.RESPONSE);
-    double gain = m.number("gain", QuantityKind.FRACTION, Range.ANY);
-    if (Math.abs(gain) > 5) {
-      m.get("gain")
-          .ifPresent(e -> e.caution("a gain of " + e.shown() + " is unusual", "check the value"));
-    }
-    return new Flame.GainDelay(gain, m.number("delay", QuantityKind.TIME, Range.NOT_NEGATIVE));
-  }
-
-  private List<Flame.StagedBurners> staging(Entry entry) {
+  private List<Flame.StagedBurners> staging(Entry entry, Optional<Flame.Response> response) {
     List<Flame.StagedBurners> all = new ArrayList<>();
     if (!(geometry instanceof Geometry.Ring ring)) {
       entry.fault("staging outside a ring", "burners differ only on 'kind: ring'");
@@ -294,6 +317,9 @@ final class FlameReader {
           m.get("burners").map(e -> Burners.read(e, ring.burnerCount())).orElse(List.of());
       if (item.isMapping() && !m.has("gain") && !m.has("delay") && !m.has("heat_share")) {
         item.fault("an exception that changes nothing", "add gain, delay or heat_share");
+      }
+      if (m.has("gain") || m.has("delay")) {
+        oneGain(m, response);
       }
       all.add(
           new Flame.StagedBurners(
@@ -310,5 +336,15 @@ final class FlameReader {
     return entries.containsKey(key)
         ? OptionalDouble.of(entries.get(key).number(kind, range))
         : OptionalDouble.empty();
+  }
+
+  private static void oneGain(Mapping m, Optional<Flame.Response> response) {
+    if (response.isPresent()
+        && (response.get() instanceof Flame.DelaySum || response.get() instanceof Flame.Measured)) {
+      m.entry()
+          .fault(
+              "gain or delay of some burners, but the response is a sum or a table",
+              "let these burners differ by 'heat_share'");
+    }
   }
 }

@@ -2,6 +2,7 @@ package org.annulet.cases.read;
 
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import org.annulet.cases.units.QuantityKind;
@@ -9,7 +10,16 @@ import org.annulet.cases.units.QuantityKind;
 /** Reads {@code walls}. */
 final class WallReader {
   private static final List<String> WORDS = List.of("rigid", "open");
-  private static final List<String> KINDS = List.of("impedance", "admittance", "choked_nozzle");
+  private static final List<String> KINDS =
+      List.of(
+          "impedance",
+          "admittance",
+          "choked_nozzle",
+          "impedance_table",
+          "admittance_table",
+          "reflection_table",
+          "perforated",
+          "radiating_end");
 
   private WallReader() {}
 
@@ -54,6 +64,24 @@ final class WallReader {
       return Optional.of(
           new Wall.ChokedNozzle(nozzle.number("mach", QuantityKind.FRACTION, Range.MACH)));
     }
+    if (kind.get().endsWith("_table")) {
+      Wall.Quantity quantity =
+          Wall.Quantity.valueOf(kind.get().replace("_table", "").toUpperCase(Locale.ROOT));
+      return FrequencyTable.read(value).map(t -> new Wall.Tabulated(quantity, t));
+    }
+    if (kind.get().equals("perforated")) {
+      return Optional.of(perforated(Mapping.of(value, CaseKeys.PERFORATED)));
+    }
+    if (kind.get().equals("radiating_end")) {
+      Mapping end = Mapping.of(value, CaseKeys.RADIATING_END);
+      Wall.Rim rim =
+          end.get("rim")
+              .flatMap(e -> e.choice(List.of("flanged", "unflanged")))
+              .map(w -> Wall.Rim.valueOf(w.toUpperCase(Locale.ROOT)))
+              .orElse(Wall.Rim.FLANGED);
+      return Optional.of(
+          new Wall.RadiatingEnd(end.number("radius", QuantityKind.LENGTH, Range.POSITIVE), rim));
+    }
     double[] z = complex(value);
     if (z[0] < 0) {
       value.caution(
@@ -67,6 +95,23 @@ final class WallReader {
       value.fault("impedance 0", "write 'open'");
     }
     return Optional.of(new Wall.Impedance(z[0], z[1]));
+  }
+
+  private static Wall perforated(Mapping m) {
+    double bore = m.number("hole_bore", QuantityKind.LENGTH, Range.POSITIVE);
+    double pitch = m.number("pitch", QuantityKind.LENGTH, Range.POSITIVE);
+    if (pitch <= bore) {
+      m.at("pitch")
+          .fault(
+              "holes of " + Shown.millimetres(bore) + " do not fit into this pitch",
+              "the pitch must exceed the bore");
+    }
+    return new Wall.Perforated(
+        bore,
+        pitch,
+        m.number("thickness", QuantityKind.LENGTH, Range.NOT_NEGATIVE),
+        m.number("bias_velocity", QuantityKind.SPEED, Range.POSITIVE),
+        m.number("cavity_depth", QuantityKind.LENGTH, Range.POSITIVE, Double.POSITIVE_INFINITY));
   }
 
   private static double[] complex(Entry value) {

@@ -4,6 +4,7 @@ import java.math.BigDecimal;
 import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.Damper;
 import org.annulet.cases.read.Flame;
@@ -65,6 +66,15 @@ final class CaseConditions {
     }
     if (wall instanceof Wall.ChokedNozzle n) {
       return "choked nozzle, Mach " + number(n.mach());
+    }
+    if (wall instanceof Wall.Tabulated t) {
+      return t.quantity().name().toLowerCase(Locale.ROOT) + " from " + t.table().file();
+    }
+    if (wall instanceof Wall.Perforated p) {
+      return "perforated, bias flow " + number(p.biasVelocity()) + " m/s";
+    }
+    if (wall instanceof Wall.RadiatingEnd e) {
+      return e.rim().name().toLowerCase(Locale.ROOT) + " opening";
     }
     return wall instanceof Wall.Open ? "open" : "rigid";
   }

@@ -2,19 +2,28 @@ package org.annulet.cases.study;
 
 import java.util.List;
 import java.util.Map;
+import java.util.OptionalDouble;
 import java.util.TreeMap;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.Flame;
 import org.annulet.cases.read.Geometry;
+import org.annulet.solver.flame.DelaySpread;
+import org.annulet.solver.flame.DelaySum;
 import org.annulet.solver.flame.Firing;
+import org.annulet.solver.flame.FittedResponse;
+import org.annulet.solver.flame.LowPass;
 import org.annulet.solver.flame.NTau;
 import org.annulet.solver.flame.Patch;
 import org.annulet.solver.flame.Place;
 import org.annulet.solver.flame.Reference;
+import org.annulet.solver.flame.Response;
 import org.annulet.solver.flame.Side;
 
 /** The flames of a case as the solver's. */
 final class CaseFlames {
+  /** Wanted error of the fit of a table, over its largest value. */
+  static final double FIT = 0.01;
+
   private final CaseFile caseFile;
 
   CaseFlames(CaseFile caseFile) {
@@ -46,9 +55,28 @@ final class CaseFlames {
         f.name(), place(f.place()), reference(f), rule, staging);
   }
 
-  private static NTau response(Flame.Response response) {
-    Flame.GainDelay n = (Flame.GainDelay) response;
-    return new NTau(n.gain(), n.delay());
+  /** The solver's response; a table is fitted, see {@link FittedResponse}. */
+  static Response response(Flame.Response response) {
+    if (response instanceof Flame.GainDelay n) {
+      return new NTau(n.gain(), n.delay());
+    }
+    if (response instanceof Flame.SpreadDelay n) {
+      return new DelaySpread(n.gain(), n.delay(), n.deviation());
+    }
+    if (response instanceof Flame.LowPass n) {
+      return new LowPass(n.gain(), n.delay(), n.cutoff());
+    }
+    if (response instanceof Flame.DelaySum sum) {
+      return new DelaySum(sum.parts().stream().map(n -> new NTau(n.gain(), n.delay())).toList());
+    }
+    Flame.Measured measured = (Flame.Measured) response;
+    OptionalDouble limit =
+        switch (measured.limit()) {
+          case PREMIXED -> OptionalDouble.of(1);
+          case TECHNICALLY_PREMIXED -> OptionalDouble.of(0);
+          case AS_MEASURED -> OptionalDouble.empty();
+        };
+    return FittedResponse.of(CaseWalls.table(measured.table()), FIT, limit);
   }
 
   private Place place(Flame.Place place) {
@@ -62,6 +90,12 @@ final class CaseFlames {
   }
 
   private Reference reference(Flame f) {
+    if (f.reference() instanceof Flame.EdgePressure edge) {
+      return new Reference.EdgePressure(edge.edge());
+    }
+    if (f.reference() instanceof Flame.PatchPressure p) {
+      return new Reference.PatchPressure(new Patch(p.zone(), p.from(), p.to(), p.width()));
+    }
     if (f.reference() instanceof Flame.EdgeFlux edge) {
       return new Reference.EdgeFlux(
           edge.edge(), new Side.InZone(edge.flowFrom()), f.referenceVelocity());

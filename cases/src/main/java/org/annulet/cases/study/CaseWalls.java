@@ -3,18 +3,26 @@ package org.annulet.cases.study;
 import java.util.List;
 import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.FrequencyTable;
 import org.annulet.cases.read.Wall;
 import org.annulet.solver.assembly.Face;
 import org.annulet.solver.assembly.ProblemBuilder;
 import org.annulet.solver.boundary.Admittance;
 import org.annulet.solver.boundary.ChokedNozzle;
+import org.annulet.solver.boundary.FittedWall;
 import org.annulet.solver.boundary.Impedance;
 import org.annulet.solver.boundary.OpenEnd;
+import org.annulet.solver.boundary.PerforatedLiner;
+import org.annulet.solver.boundary.RadiatingEnd;
 import org.annulet.solver.boundary.Rigid;
+import org.annulet.solver.rational.Table;
 import org.apache.commons.math3.complex.Complex;
 
 /** The walls of a case on a problem. */
 final class CaseWalls {
+  /** Wanted error of the fit of a table, in reflection coefficient. */
+  static final double FIT = 0.01;
+
   private static final String INNER = ".inner_face";
   private static final String OUTER = ".outer_face";
 
@@ -65,6 +73,39 @@ final class CaseWalls {
     if (wall instanceof Wall.ChokedNozzle nozzle) {
       return new ChokedNozzle(nozzle.mach());
     }
+    if (wall instanceof Wall.Tabulated t) {
+      return fitted(t);
+    }
+    if (wall instanceof Wall.Perforated p) {
+      return new PerforatedLiner(
+          new PerforatedLiner.Plate(p.holeBore() / 2, p.pitch(), p.thickness()),
+          p.biasVelocity(),
+          p.cavityDepth());
+    }
+    if (wall instanceof Wall.RadiatingEnd e) {
+      return e.rim() == Wall.Rim.FLANGED
+          ? RadiatingEnd.flanged(e.radius())
+          : RadiatingEnd.unflanged(e.radius());
+    }
     return new Rigid();
+  }
+
+  /** The wall a table describes, as a fit of its reflection coefficient. */
+  static FittedWall fitted(Wall.Tabulated wall) {
+    Table table = table(wall.table());
+    return switch (wall.quantity()) {
+      case IMPEDANCE -> FittedWall.ofImpedance(table, FIT);
+      case ADMITTANCE -> FittedWall.ofAdmittance(table, FIT);
+      case REFLECTION -> FittedWall.ofReflection(table, FIT);
+    };
+  }
+
+  /** A table of a case as the solver's. */
+  static Table table(FrequencyTable t) {
+    Complex[] values = new Complex[t.frequency().length];
+    for (int k = 0; k < values.length; k++) {
+      values[k] = new Complex(t.re()[k], t.im()[k]);
+    }
+    return new Table(t.frequency(), values);
   }
 }

@@ -204,7 +204,7 @@ class ReadingCasesTest {
                     "geometry.unrolled_radius", "340 mm",
                     "walls.chamber.downstream.impedance", "[3, 1]"))
             .orThrow();
-    assertThat(c.flames().get(0).responseAt(1).delay()).isEqualTo(0.001);
+    assertThat(((Flame.GainDelay) c.flames().get(0).responseAt(1)).delay()).isEqualTo(0.001);
     assertThat(((Geometry.Ring) c.geometry()).zone("chamber").length()).isEqualTo(0.5);
     assertThat(((Geometry.Ring) c.geometry()).unrolledRadius()).isEqualTo(0.34);
     assertThat(c.wall("chamber.downstream")).isEqualTo(new Wall.Impedance(3, 1));

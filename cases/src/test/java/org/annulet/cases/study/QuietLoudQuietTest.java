@@ -6,6 +6,7 @@ import java.nio.file.Path;
 import java.util.Map;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseReader;
+import org.annulet.cases.read.Flame;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.Results;
 import org.junit.jupiter.api.Test;
@@ -28,11 +29,11 @@ class QuietLoudQuietTest {
   void variantsHoldTheSameNumbers() {
     CaseFile trap = CaseReader.read(CASE).orThrow();
     assertThat(trap.variants())
-        .extracting(v -> v.caseFile().flames().get(0).responseAt(1).delay())
-        .containsExactly(2.6e-3, 2.15e-3, 1.7e-3);
-    assertThat(trap.variants())
-        .extracting(v -> v.caseFile().flames().get(0).responseAt(1).gain())
-        .containsExactly(0.6, 0.7, 0.8);
+        .extracting(v -> v.caseFile().flames().get(0).responseAt(1))
+        .containsExactly(
+            new Flame.GainDelay(0.6, 2.6e-3),
+            new Flame.GainDelay(0.7, 2.15e-3),
+            new Flame.GainDelay(0.8, 1.7e-3));
   }
 
   private static double largestGrowth(String delay, String gain) {
