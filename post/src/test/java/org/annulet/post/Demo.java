@@ -10,6 +10,7 @@ import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
+import org.annulet.post.meaning.ModeMaps;
 import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.meaning.Results;
@@ -84,7 +85,8 @@ public final class Demo {
                       new ParameterSensitivity(
                           "flames.<1>.response.delay", "2.1 ms", 0.1 * (i + 1), -0.02, 3.5),
                       new ParameterSensitivity(
-                          "gas.zones.chamber.temperature", "1850 K", -0.05, 1.2, 250))));
+                          "gas.zones.chamber.temperature", "1850 K", -0.05, 1.2, 250)))
+              .with(maps(views.get(i))));
     }
     results =
         new Results(
@@ -95,5 +97,14 @@ public final class Demo {
             modes,
             List.of(),
             List.of("All data of this case are invented."));
+  }
+
+  /** −2000 |p|² and Re p: invented, for the pictures. */
+  private static ModeMaps maps(ModeView view) {
+    double[] damper = new double[view.re().length];
+    for (int v = 0; v < damper.length; v++) {
+      damper[v] = -2000 * (view.re()[v] * view.re()[v] + view.im()[v] * view.im()[v]);
+    }
+    return new ModeMaps(damper, view.re());
   }
 }

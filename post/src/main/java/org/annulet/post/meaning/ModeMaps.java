@@ -113,11 +113,12 @@ public record ModeMaps(double[] damper, double[] drive) {
     return mesh.area(t) * chamber.thickness(t) * chamber.arcScale(mesh.zone(t)) / 3;
   }
 
-  /** Node where a damper damps most; −1 where there is no wall. */
+  /** Node where a damper damps most, the first of equals; −1 where there is no wall. */
   public static int best(double[] damper) {
     int best = -1;
     for (int v = 0; v < damper.length; v++) {
-      if (!Double.isNaN(damper[v]) && (best < 0 || damper[v] < damper[best])) {
+      if (!Double.isNaN(damper[v])
+          && (best < 0 || damper[v] < damper[best] - 1e-6 * Math.abs(damper[best]))) {
         best = v;
       }
     }

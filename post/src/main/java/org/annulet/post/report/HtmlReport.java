@@ -71,6 +71,7 @@ public final class HtmlReport {
     chamber(mesh, picture);
     spectrum();
     table();
+    DamperPlaces.append(b, input);
     b.append("<section id=\"modes\"><h2>Mode by mode</h2>\n")
         .append("<noscript><p>The moving fields need scripts; everything else does not.</p>")
         .append("</noscript>\n");
@@ -111,9 +112,13 @@ public final class HtmlReport {
       {"chamber", "Chamber"},
       {"spectrum", "Spectrum"},
       {"table", "Table"},
+      {"dampers", "Dampers"},
       {"modes", "Modes"}
     };
     for (String[] p : parts) {
+      if (p[0].equals("dampers") && DamperPlaces.targets(results).isEmpty()) {
+        continue;
+      }
       b.append("<li><a href=\"#").append(p[0]).append("\">").append(p[1]).append("</a></li>");
     }
     b.append("</ul></nav>\n");
@@ -287,8 +292,10 @@ public final class HtmlReport {
         .append(n)
         .append(": ")
         .append(escape(e.label().text()))
-        .append("\"></canvas>\n<div class=\"legend\"><span>−</span><span class=\"ramp\"></span>")
-        .append("<span>+ pressure, largest amplitude 1</span></div>\n<div class=\"controls\">")
+        .append(
+            "\"></canvas>\n<div class=\"legend\"><span class=\"low\">−</span><span class=\"ramp\"></span>")
+        .append(
+            "<span class=\"high\">+ pressure, largest amplitude 1</span></div>\n<div class=\"controls\">")
         .append("<button type=\"button\" aria-pressed=\"false\">Play</button>")
         .append(
             "<label class=\"phase\">phase <input type=\"range\" min=\"0\" max=\"360\" step=\"any\"")
@@ -297,8 +304,9 @@ public final class HtmlReport {
         .append(" in degrees\"><output>0°</output></label>")
         .append("<label class=\"which\">shown <select aria-label=\"Shown combination of mode ")
         .append(n)
-        .append("\"><option value=\"-1\">the mode as computed</option></select></label></div>\n")
-        .append("</div>\n<div class=\"meaning\">");
+        .append("\"><option value=\"-1\">the mode as computed</option></select></label></div>\n");
+    ModeDetails.levers(b, e);
+    b.append("</div>\n<div class=\"meaning\">");
     ModeDetails.append(b, input, i);
     b.append("</div></article>\n");
   }

@@ -23,9 +23,6 @@ final class ModeDetails {
     ModeEntry e = input.results().modes().get(i);
     facts(b, input, e);
     e.budget().ifPresent(budget -> budget(b, budget));
-    if (!e.sensitivities().isEmpty()) {
-      sensitivities(b, e.sensitivities());
-    }
   }
 
   private static void facts(StringBuilder b, ReportInput input, ModeEntry e) {
@@ -121,39 +118,53 @@ final class ModeDetails {
         .append(escape(texts[1]))
         .append("</span><span>")
         .append(escape(texts[2].replace('-', '−')))
-        .append("</span><span class=\"track\"><i class=\"")
+        .append("</span>");
+    track(b, fraction);
+    b.append("</div>\n");
+  }
+
+  private static void track(StringBuilder b, double fraction) {
+    b.append("<span class=\"track\"><i class=\"")
         .append(fraction >= 0 ? "drives" : "damps")
         .append("\" style=\"width:")
         .append(String.format(Locale.ROOT, "%.2f", 50 * Math.min(1, Math.abs(fraction))))
-        .append("%\"></i></span></div>\n");
+        .append("%\"></i></span>");
   }
 
-  private static void sensitivities(StringBuilder b, List<ParameterSensitivity> all) {
+  /** Ranked bars of what one percent more of each input does; nothing where it was not computed. */
+  static void levers(StringBuilder b, ModeEntry e) {
+    List<ParameterSensitivity> all = e.sensitivities();
+    if (all.isEmpty()) {
+      return;
+    }
     List<ParameterSensitivity> top = all.subList(0, Math.min(ITEMS, all.size()));
     double largest = top.stream().mapToDouble(s -> Math.abs(s.growthPerPercent())).max().orElse(0);
-    b.append("<div class=\"bars levers\"><h4>One percent more of … moves the growth rate by [1/s]")
-        .append("</h4>\n");
+    b.append("<div class=\"bars levers\"><h4>What one percent more does</h4>\n")
+        .append("<div class=\"bar head\"><span></span><span></span><span>growth [1/s]</span>")
+        .append("<span>frequency [Hz]</span><span>holds within</span></div>\n");
     for (ParameterSensitivity s : top) {
-      bar(
-          b,
-          new String[] {
-            "bar",
-            s.key() + " (" + s.value() + ")",
-            Numbers.signed(s.growthPerPercent())
-                + " (and "
-                + Numbers.signed(s.frequencyPerPercent())
-                + " Hz; straight within "
-                + range(s.linearRange())
-                + ")"
-          },
-          largest > 0 ? s.growthPerPercent() / largest : 0);
+      b.append("<div class=\"bar\"><span>")
+          .append(escape(s.key()))
+          .append(" <small>")
+          .append(escape(s.value()))
+          .append("</small></span>");
+      track(b, largest > 0 ? s.growthPerPercent() / largest : 0);
+      b.append("<span>")
+          .append(Numbers.signed(s.growthPerPercent()).replace('-', '−'))
+          .append("</span><span>")
+          .append(Numbers.signed(s.frequencyPerPercent()).replace('-', '−'))
+          .append("</span><span>")
+          .append(range(s.linearRange()))
+          .append("</span></div>\n");
     }
+    b.append("<p class=\"sign\">First order, all other inputs held; it holds to a tenth within the")
+        .append(" range given.");
     if (all.size() > top.size()) {
-      b.append("<p class=\"sign\">")
+      b.append(" Weaker inputs, in sensitivities.csv: ")
           .append(all.size() - top.size())
-          .append(" weaker inputs stand in sensitivities.csv.</p>");
+          .append('.');
     }
-    b.append("</div>\n");
+    b.append("</p></div>\n");
   }
 
   /** How far a straight line serves, in percent of the input. */

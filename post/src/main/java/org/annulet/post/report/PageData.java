@@ -4,11 +4,14 @@ import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.util.Base64;
 import java.util.List;
+import java.util.Locale;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.chart.ChamberPicture;
 import org.annulet.post.chart.PlaneView;
+import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel.Pairing;
+import org.annulet.post.meaning.ModeMaps;
 import org.annulet.post.meaning.PairCombination;
 import org.annulet.post.table.JsonWriter;
 import org.annulet.post.vtk.Surface;
@@ -45,11 +48,19 @@ final class PageData {
         .text("points", base64(place))
         .text("triangles", base64(corners))
         .array("modes");
+    boolean walls = input.chamber().kind() != GeometryKind.RING;
     List<ModeEntry> modes = input.results().modes();
     for (int i = 0; i < modes.size(); i++) {
       mode(json, input, i, new int[][] {thin.points(), nodes(flat, thin.points())});
     }
-    return json.endArray().endObject().toString();
+    json.endArray();
+    List<ModeMaps> targets = DamperPlaces.targets(input.results());
+    if (!targets.isEmpty()) {
+      json.object("worst");
+      map(json, ModeMaps.worst(targets), nodes(flat, thin.points()));
+      json.truth("walls", walls).endObject();
+    }
+    return json.endObject().toString();
   }
 
   private static int[] nodes(Surface flat, int[] points) {
@@ -89,7 +100,46 @@ final class PageData {
             .endObject();
       }
     }
+    json.endArray().array("maps");
+    if (e.maps().isPresent()) {
+      boolean walls = input.chamber().kind() != GeometryKind.RING;
+      double most = largest(e.maps().get().damper()) * DamperPlaces.PER_CM2;
+      String end = String.format(Locale.ROOT, "%.2g", most);
+      json.object()
+          .text("name", "where a damper helps")
+          .text("low", "−" + end)
+          .text("high", "+" + end + " 1/s per cm² of damper; blue-green damps");
+      map(json, e.maps().get().damper(), thin[1]);
+      json.truth("walls", walls).endObject();
+      if (largest(e.maps().get().drive()) > 0) {
+        json.object()
+            .text("name", "where the flame drives")
+            .text("low", "damps")
+            .text("high", "drives; share of the growth rate per volume");
+        map(json, e.maps().get().drive(), thin[1]);
+        json.truth("walls", false).endObject();
+      }
+    }
     json.endArray().endObject();
+  }
+
+  /** A map at the points, over its largest size, nought where it is not defined. */
+  private static void map(JsonWriter json, double[] values, int[] nodes) {
+    double largest = Math.max(largest(values), Double.MIN_NORMAL);
+    ByteBuffer field = buffer(2 * nodes.length);
+    for (int v : nodes) {
+      field.putShort(
+          (short) (Double.isNaN(values[v]) ? 0 : Math.round(32767 * values[v] / largest)));
+    }
+    json.text("field", base64(field));
+  }
+
+  private static double largest(double[] values) {
+    double max = 0;
+    for (double v : values) {
+      max = Double.isNaN(v) ? max : Math.max(max, Math.abs(v));
+    }
+    return max;
   }
 
   private static double largest(ModeEntry e) {

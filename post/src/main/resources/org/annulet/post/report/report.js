@@ -67,44 +67,25 @@
     return map;
   }
 
-  class Viewer {
-    constructor(article, index) {
-      this.index = index;
-      this.canvas = article.querySelector("canvas");
-      this.slider = article.querySelector("input[type=range]");
-      this.output = article.querySelector("output");
-      this.button = article.querySelector("button");
-      this.select = article.querySelector("select");
-      this.playing = false;
-      this.value = new Float32Array(count);
-      this.mix();
-      this.slider.addEventListener("input", () => this.draw());
-      this.button.addEventListener("click", () => this.toggle());
-      if (this.select) {
-        data.modes[index].combinations.forEach((c, k) => this.select.add(new Option(c.name, k)));
-        this.select.closest(".which").hidden = data.modes[index].combinations.length === 0;
-        this.select.addEventListener("change", () => { this.mix(); this.draw(); });
+  // Sides that belong to one triangle: the walls, for maps that live on walls only.
+  const walls = (() => {
+    const seen = new Map();
+    for (let t = 0; t < triangles.length; t += 3) {
+      for (let k = 0; k < 3; k++) {
+        const a = triangles[t + k], b = triangles[t + (k + 1) % 3];
+        const key = Math.min(a, b) * count + Math.max(a, b);
+        if (seen.has(key)) seen.delete(key); else seen.set(key, [a, b]);
       }
     }
+    return [...seen.values()];
+  })();
+  const shade = (f) => Math.max(0, Math.min(255, Math.round(127.5 + 127.5 * f)));
+  const css = (i) => "rgb(" + [0, 8, 16].map((s) => (palette[i] >> s) & 255).join(",") + ")";
+  // A map between -1 and 1 at the points.
+  const mapOf = (m) => (m.values ??= Float32Array.from(new Int16Array(bytes(m.field)), (v) => v / 32767));
 
-    // The complex field shown: the mode itself or a combination with its partner, largest value 1.
-    mix() {
-      const pick = this.select ? Number(this.select.value) : -1;
-      const own = fieldOf(this.index);
-      this.re = new Float32Array(count);
-      this.im = new Float32Array(count);
-      const combination = pick >= 0 ? data.modes[this.index].combinations[pick] : null;
-      const other = combination ? fieldOf(combination.partner) : own;
-      const [ar, ai, br, bi] = combination ? combination.weights : [1, 0, 0, 0];
-      let largest = 1e-30;
-      for (let i = 0; i < count; i++) {
-        const [pr, pi, qr, qi] = [own[i], own[count + i], other[i], other[count + i]];
-        this.re[i] = ar * pr - ai * pi + br * qr - bi * qi;
-        this.im[i] = ar * pi + ai * pr + br * qi + bi * qr;
-        largest = Math.max(largest, Math.hypot(this.re[i], this.im[i]));
-      }
-      for (let i = 0; i < count; i++) { this.re[i] /= largest; this.im[i] /= largest; }
-    }
+  class Picture {
+    constructor(canvas) { this.canvas = canvas; }
 
     size() {
       const wide = this.canvas.clientWidth;
@@ -121,19 +102,15 @@
       return true;
     }
 
-    draw() {
-      if (!this.size()) return;
+    // Colours between -1 and 1 over the gas, or along the walls only.
+    paint(v, alongWalls) {
       palette ??= colours();
-      const phase = ((Number(this.slider.value) % 360) * Math.PI) / 180;
-      const [c, s] = [Math.cos(phase), Math.sin(phase)];
-      for (let i = 0; i < count; i++) this.value[i] = c * this.re[i] - s * this.im[i];
       const { corner, one, two, inside } = this.map;
-      const v = this.value;
       for (let q = 0; q < inside.length; q++) {
         const p = inside[q], t = corner[p];
         const a = v[triangles[t]];
         const f = a + one[p] * (v[triangles[t + 1]] - a) + two[p] * (v[triangles[t + 2]] - a);
-        this.pixels[p] = palette[Math.max(0, Math.min(255, Math.round(127.5 + 127.5 * f)))];
+        this.pixels[p] = palette[alongWalls ? 128 : shade(f)];
       }
       const g = this.canvas.getContext("2d");
       g.putImageData(this.image, 0, 0);
@@ -142,7 +119,103 @@
       g.strokeStyle = printing ? "#23252a" : getComputedStyle(this.canvas).color;
       g.lineWidth = 1.1;
       g.stroke(outline);
+      if (alongWalls) {
+        const ink = g.strokeStyle;
+        g.lineCap = "round";
+        for (const width of [9, 6.5]) { // a rim of ink, so that walls without effect still show
+          g.lineWidth = width;
+          for (const [a, b] of walls) {
+            g.strokeStyle = width > 7 ? ink : css(shade((v[a] + v[b]) / 2));
+            g.beginPath();
+            g.moveTo(points[2 * a], points[2 * a + 1]);
+            g.lineTo(points[2 * b], points[2 * b + 1]);
+            g.stroke();
+          }
+        }
+        g.lineCap = "butt";
+      }
       g.setTransform(1, 0, 0, 1, 0, 0);
+    }
+  }
+
+  // A map that stands still: the worst of several modes.
+  class Still extends Picture {
+    constructor(figure) {
+      super(figure.querySelector("canvas"));
+      this.playing = false;
+    }
+
+    draw() {
+      if (this.size()) this.paint(mapOf(data.worst), data.worst.walls);
+    }
+
+    toggle() {}
+  }
+
+  class Viewer extends Picture {
+    constructor(article, index) {
+      super(article.querySelector("canvas"));
+      this.index = index;
+      this.high = article.querySelector(".legend .high");
+      this.low = article.querySelector(".legend .low");
+      this.pressure = [this.low.textContent, this.high.textContent];
+      this.phase = article.querySelector(".phase");
+      this.slider = article.querySelector("input[type=range]");
+      this.output = article.querySelector("output");
+      this.button = article.querySelector("button");
+      this.select = article.querySelector("select");
+      this.playing = false;
+      this.value = new Float32Array(count);
+      this.mix();
+      this.slider.addEventListener("input", () => this.draw());
+      this.button.addEventListener("click", () => this.toggle());
+      if (this.select) {
+        const { combinations, maps } = data.modes[index];
+        combinations.forEach((c, k) => this.select.add(new Option(c.name, k)));
+        maps.forEach((m, k) => this.select.add(new Option(m.name, combinations.length + k)));
+        this.select.closest(".which").hidden = combinations.length + maps.length === 0;
+        this.select.addEventListener("change", () => { this.mix(); this.draw(); });
+      }
+    }
+
+    // The complex field shown: the mode itself or a combination with its partner, largest value 1.
+    mix() {
+      const pick = this.select ? Number(this.select.value) : -1;
+      const { combinations, maps } = data.modes[this.index];
+      this.still = pick >= combinations.length ? maps[pick - combinations.length] : null;
+      this.phase.hidden = this.still !== null;
+      this.button.hidden = this.still !== null;
+      [this.low.textContent, this.high.textContent] = this.still ? [this.still.low, this.still.high] : this.pressure;
+      if (this.still) {
+        if (this.playing) this.toggle();
+        return;
+      }
+      const own = fieldOf(this.index);
+      this.re = new Float32Array(count);
+      this.im = new Float32Array(count);
+      const combination = pick >= 0 ? combinations[pick] : null;
+      const other = combination ? fieldOf(combination.partner) : own;
+      const [ar, ai, br, bi] = combination ? combination.weights : [1, 0, 0, 0];
+      let largest = 1e-30;
+      for (let i = 0; i < count; i++) {
+        const [pr, pi, qr, qi] = [own[i], own[count + i], other[i], other[count + i]];
+        this.re[i] = ar * pr - ai * pi + br * qr - bi * qi;
+        this.im[i] = ar * pi + ai * pr + br * qi + bi * qr;
+        largest = Math.max(largest, Math.hypot(this.re[i], this.im[i]));
+      }
+      for (let i = 0; i < count; i++) { this.re[i] /= largest; this.im[i] /= largest; }
+    }
+
+    draw() {
+      if (!this.size()) return;
+      if (this.still) {
+        this.paint(mapOf(this.still), this.still.walls);
+        return;
+      }
+      const phase = ((Number(this.slider.value) % 360) * Math.PI) / 180;
+      const [c, s] = [Math.cos(phase), Math.sin(phase)];
+      for (let i = 0; i < count; i++) this.value[i] = c * this.re[i] - s * this.im[i];
+      this.paint(this.value, false);
       this.output.textContent = Math.round(Number(this.slider.value)) + "°";
     }
 
@@ -169,6 +242,11 @@
 
   const articles = [...document.querySelectorAll("article.mode")];
   const viewers = articles.map((a, i) => new Viewer(a, i));
+  const figure = document.querySelector("figure.worst");
+  if (figure) {
+    articles.push(figure);
+    viewers.push(new Still(figure));
+  }
   const seen = new IntersectionObserver((entries) => {
     entries.forEach((e) => { if (e.isIntersecting) viewers[articles.indexOf(e.target)].draw(); });
   }, { rootMargin: "300px" });

@@ -174,12 +174,50 @@ class ReportInBrowserTest {
             "spins towards smaller angles",
             "spins towards larger angles",
             "stands, maximum at 0°",
-            "stands, node at 0°");
+            "stands, node at 0°",
+            "where a damper helps",
+            "where the flame drives");
     String before = picture(article);
     which.selectByIndex(1);
     assertThat(picture(article)).isNotEqualTo(before);
     WebElement alone = browser.findElement(By.id("mode-1"));
-    assertThat(alone.findElement(By.cssSelector(".which")).isDisplayed()).isFalse();
+    assertThat(new Select(alone.findElement(By.tagName("select"))).getOptions()).hasSize(3);
+  }
+
+  @Test
+  void damperMap_standsStillAndIsDampingEverywhere() {
+    WebElement article = mode(1);
+    Select which = new Select(article.findElement(By.tagName("select")));
+    which.selectByVisibleText("where a damper helps");
+    assertThat(article.findElement(By.cssSelector(".phase")).isDisplayed()).isFalse();
+    assertThat(article.findElement(By.tagName("button")).isDisplayed()).isFalse();
+    assertThat(article.findElement(By.cssSelector(".legend")).getText()).contains("per cm²");
+    assertThat(redMinusBlue(article)).isNegative(); // −2000 |p|²: blue-green damps
+    which.selectByIndex(0);
+    assertThat(article.findElement(By.cssSelector(".phase")).isDisplayed()).isTrue();
+    slide(article.findElement(By.cssSelector("input[type=range]")), 0);
+    assertThat(redMinusBlue(article)).isPositive();
+  }
+
+  @Test
+  void placesForDampers_arePicturedAndListed() {
+    WebElement part = browser.findElement(By.id("dampers"));
+    browser.executeScript("arguments[0].scrollIntoView({behavior:'instant'})", part);
+    WebElement canvas = part.findElement(By.tagName("canvas"));
+    new WebDriverWait(browser, Duration.ofSeconds(10)).until(d -> coloured(canvas) > 100);
+    assertThat(redMinusBlue(part)).isNegative();
+    assertThat(part.getText()).contains("Mode 1").contains("edge right").contains("1/s per cm²");
+  }
+
+  @Test
+  void sensitivities_areRankedBars() {
+    WebElement bars = mode(2).findElement(By.cssSelector(".levers"));
+    assertThat(bars.getText())
+        .contains("flames.<1>.response.delay 2.1 ms")
+        .contains("+0.200")
+        .contains("±4 %")
+        .contains("−0.050");
+    assertThat(bars.findElements(By.cssSelector(".track i"))).hasSize(2);
   }
 
   @Test
@@ -241,7 +279,7 @@ class ReportInBrowserTest {
           java.util.Map.of(
               "features",
               List.of(java.util.Map.of("name", "prefers-color-scheme", "value", scheme))));
-      for (String part : new String[] {"", "chamber", "spectrum", "table", "mode-3"}) {
+      for (String part : new String[] {"", "chamber", "spectrum", "table", "dampers", "mode-3"}) {
         browser.executeScript(
             "const e=document.getElementById(arguments[0]);e?e.scrollIntoView({behavior:'instant'})"
                 + ":scrollTo({top:0,behavior:'instant'})",
