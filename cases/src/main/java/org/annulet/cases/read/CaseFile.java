@@ -45,8 +45,14 @@ public record CaseFile(
    * Which files are written beside the tables.
    *
    * @param fieldFiles most modes whose field is written, those growing fastest first
+   * @param shapesAlong edges along which mode shapes are tabulated; empty for the usual ones
    */
-  public record Outputs(int fieldFiles) {}
+  public record Outputs(int fieldFiles, List<String> shapesAlong) {
+    /** Everything, as where the case says nothing. */
+    static Outputs everything() {
+      return new Outputs(Integer.MAX_VALUE, List.of());
+    }
+  }
 
   /**
    * The case with some values changed.

@@ -159,7 +159,7 @@ public final class CaseReader {
                 .orElse(Studies.NONE)
             : Studies.NONE;
     CaseFile.Outputs outputs =
-        m.get("outputs").map(CaseReader::outputs).orElse(new CaseFile.Outputs(Integer.MAX_VALUE));
+        m.get("outputs").map(new OutputsReader(names)::read).orElse(CaseFile.Outputs.everything());
     boolean clean = binder.clean();
     Set<Problem> problems = new LinkedHashSet<>(binder.problems());
     Set<Problem> cautions = new LinkedHashSet<>(binder.cautions());
@@ -200,23 +200,6 @@ public final class CaseReader {
           "format " + e.shown() + " of case files is not known to this version",
           "write 'annulet: " + FORMAT + "'");
     }
-  }
-
-  private static CaseFile.Outputs outputs(Entry e) {
-    Mapping m = Mapping.of(e, CaseKeys.OUTPUTS);
-    Optional<Entry> files = m.get("field_files");
-    if (files.isEmpty() || files.flatMap(Entry::text).equals(Optional.of("all"))) {
-      return new CaseFile.Outputs(Integer.MAX_VALUE);
-    }
-    if (files.flatMap(Entry::text).equals(Optional.of("none"))) {
-      return new CaseFile.Outputs(0);
-    }
-    String text = files.get().text().orElse("");
-    if (!text.matches("[0-9]{1,6}")) {
-      files.get().fault("field_files is " + files.get().shown(), "write all, none or a number");
-      return new CaseFile.Outputs(0);
-    }
-    return new CaseFile.Outputs(Integer.parseInt(text));
   }
 
   private List<CaseFile.Variant> variants(

@@ -23,14 +23,21 @@ record InputChange(CaseSource.Value value, CaseFile smaller, CaseFile larger) {
 
   /** Parts of a case that do not enter its operators, or only through the shape of the mesh. */
   private static final List<String> NOT_INPUTS =
-      List.of("geometry", "window", "outputs", "variants");
+      List.of("geometry", "window", "studies", "outputs", "variants");
 
   /**
    * The numbers of a case that can be changed by themselves on the same mesh: all but those that
    * shape the mesh, those that are zero and those bound to others, as the parts of a blend.
    */
   static List<CaseSource.Value> candidates(CaseFile caseFile) {
+    boolean ownDampers =
+        caseFile
+            .with(Map.of())
+            .caseFile()
+            .map(c -> c.dampers().equals(caseFile.dampers()))
+            .orElse(false);
     return caseFile.source().values().stream()
+        .filter(v -> ownDampers || !in("dampers", v.key()))
         .filter(v -> v.si() != 0 && Double.isFinite(v.si()))
         .filter(v -> !v.text().equals(CaseSource.Value.DEFAULT))
         .filter(v -> NOT_INPUTS.stream().noneMatch(part -> in(part, v.key())))
@@ -60,12 +67,23 @@ record InputChange(CaseSource.Value value, CaseFile smaller, CaseFile larger) {
       if (text.isEmpty()) {
         continue;
       }
-      Optional<CaseFile> c = caseFile.with(Map.of(value.key(), text)).caseFile();
+      Optional<CaseFile> c =
+          caseFile
+              .with(Map.of(value.key(), text))
+              .caseFile()
+              .map(changed -> withDampersOf(caseFile, changed, value.key()));
       if (c.isPresent() && c.get().source().values().stream().anyMatch(v -> is(v, value, wanted))) {
         return c;
       }
     }
     return Optional.empty();
+  }
+
+  /** A study may have put dampers on the case that its file does not hold. */
+  private static CaseFile withDampersOf(CaseFile caseFile, CaseFile changed, String key) {
+    return in("dampers", key) || changed.dampers().equals(caseFile.dampers())
+        ? changed
+        : changed.withDampers(caseFile.dampers());
   }
 
   private static boolean is(CaseSource.Value got, CaseSource.Value value, double wanted) {

@@ -18,12 +18,14 @@ import org.annulet.post.files.WholeFile;
 import org.annulet.post.meaning.Chamber;
 import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.ModeEntry;
+import org.annulet.post.meaning.NodeLine;
 import org.annulet.post.report.Fact;
 import org.annulet.post.report.HtmlReport;
 import org.annulet.post.report.ReportInput;
 import org.annulet.post.table.ModesCsv;
 import org.annulet.post.table.ModesJson;
 import org.annulet.post.table.SensitivitiesCsv;
+import org.annulet.post.table.ShapesCsv;
 import org.annulet.post.table.TextTables;
 import org.annulet.post.vtk.ModeFiles;
 import org.annulet.post.vtk.Surface;
@@ -64,6 +66,11 @@ public final class ModesFiles {
             facts(answer.caseFile()),
             CaseConditions.markers(answer.caseFile(), answer.problem().shape().mesh())));
     int most = answer.caseFile().outputs().fieldFiles();
+    ShapesCsv.write(
+        folder.resolve("shapes.csv"),
+        answer.results(),
+        answer.chamber(),
+        lines(answer.chamber(), answer.caseFile().outputs().shapesAlong()));
     List<ModeFiles.Numbered> views = views(answer.results().modes(), most);
     Chamber chamber = answer.chamber();
     Mesh mesh = chamber.mesh();
@@ -81,6 +88,12 @@ public final class ModesFiles {
       new ModeFiles(folder, chamber, Surface.swept(mesh, 2 * Math.PI, SWEPT_FACETS))
           .modes("swept", views);
     }
+  }
+
+  private static List<NodeLine> lines(Chamber chamber, List<String> named) {
+    return named.isEmpty()
+        ? NodeLine.usual(chamber)
+        : named.stream().map(edge -> NodeLine.ofEdge(chamber, edge)).toList();
   }
 
   /** The modes to be written as fields: all, or those that grow fastest; by their number. */

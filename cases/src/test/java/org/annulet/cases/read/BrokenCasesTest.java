@@ -148,6 +148,18 @@ class BrokenCasesTest {
             18,
             "the key 'resistance' is missing",
             "add"),
+        ring(
+            "walls:",
+            "outputs: {shapes_along: [chamber.downsteam]}\nwalls:",
+            18,
+            "no edge 'chamber.downsteam'",
+            "write 'chamber.downstream'?"),
+        ring(
+            "walls:",
+            "outputs: {shapes_along: [burners.side, burners.side]}\nwalls:",
+            18,
+            "stands here twice",
+            "leave one out"),
         ring("walls:", "compare: {}\nwalls:", 18, "not supported in this version", "leave it out"),
         ring("walls:", "studies: {damper: {}}\nwalls:", 18, "unknown key 'damper'", "dampers"),
         ring(
