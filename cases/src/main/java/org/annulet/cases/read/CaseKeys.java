@@ -28,9 +28,13 @@ enum CaseKeys {
   OUTLINE_ZONE("boundary! holes separate_ducts open_share"),
   GAS("mean_pressure! zones!"),
   GAS_ZONE("temperature gamma gas_constant mixture sound_speed density as"),
-  TEMPERATURE("profile file"),
+  TEMPERATURE(
+      "profile gas_path file array length_unit temperature_unit axis sectors adiabatic_from"
+          + " fuel_temperature"),
+  GAS_PATH("corners! distance! temperature!"),
   PROFILE("x! temperature!"),
-  MIXTURE("fuel! equivalence_ratio!"),
+  MIXTURE("fuel equivalence_ratio progress humid_air"),
+  HUMID_AIR("relative_humidity! temperature! pressure!"),
   WALL(
       "impedance admittance choked_nozzle impedance_table admittance_table reflection_table"
           + " perforated radiating_end"),

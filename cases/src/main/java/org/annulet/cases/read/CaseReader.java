@@ -127,8 +127,8 @@ public final class CaseReader {
     }
     // Without a geometry no name can be checked; values still can.
     EdgeNames names = geometry.map(EdgeNames::of).orElse(new EdgeNames(List.of(), Map.of()));
-    List<String> zones = geometry.map(Geometry::zoneNames).orElse(List.of());
-    Gas gas = m.get("gas").map(e -> GasReader.read(e, zones)).orElse(new Gas(Double.NaN, Map.of()));
+    Gas gas =
+        m.get("gas").map(e -> GasReader.read(e, geometry)).orElse(new Gas(Double.NaN, Map.of()));
     Map<String, Wall> walls = m.get("walls").map(e -> WallReader.read(e, names)).orElse(Map.of());
     List<TwoPort> twoPorts =
         geometry.isPresent()

@@ -10,16 +10,15 @@ import org.annulet.cases.units.QuantityKind;
 
 /** Reads {@code gas}. */
 final class GasReader {
-  /** Above this a temperature is more likely a slip than a flame. */
-  private static final double HOT = 3500;
-
   private static final List<String> WAYS = List.of("temperature", "sound_speed", "as");
 
+  private final Optional<Geometry> geometry;
   private final double pressure;
   private final Mapping zones;
   private final Map<String, Gas.ZoneGas> known = new LinkedHashMap<>();
 
-  private GasReader(double pressure, Mapping zones) {
+  private GasReader(double pressure, Mapping zones, Optional<Geometry> geometry) {
+    this.geometry = geometry;
     this.pressure = pressure;
     this.zones = zones;
   }
@@ -27,16 +26,17 @@ final class GasReader {
   /**
    * The gas.
    *
-   * @param zoneNames zones of the geometry; empty when they are not known yet
+   * @param geometry whose zones are filled; empty when it could not be read
    */
-  static Gas read(Entry entry, List<String> zoneNames) {
+  static Gas read(Entry entry, Optional<Geometry> geometry) {
+    List<String> zoneNames = geometry.map(Geometry::zoneNames).orElse(List.of());
     Mapping m = Mapping.of(entry, CaseKeys.GAS);
     double pressure = m.number("mean_pressure", QuantityKind.PRESSURE, Range.POSITIVE);
     Optional<Entry> zones = m.get("zones");
     if (zones.isEmpty()) {
       return new Gas(pressure, Map.of());
     }
-    GasReader r = new GasReader(pressure, Mapping.named(zones.get()));
+    GasReader r = new GasReader(pressure, Mapping.named(zones.get()), geometry);
     for (String name : r.zones.names()) {
       if (!zoneNames.isEmpty() && !zoneNames.contains(name)) {
         r.zones.at(name).fault("no zone '" + name + "'", Nearest.advice(name, zoneNames));
@@ -58,6 +58,14 @@ final class GasReader {
   private void zone(String name) {
     Entry entry = zones.get(name).orElseThrow();
     Mapping z = Mapping.of(entry, CaseKeys.GAS_ZONE);
+    if (!z.has("temperature") && z.has("mixture")) {
+      z.entry()
+          .fault(
+              "a mixture without a temperature",
+              "add 'temperature: …'; for burnt gas 'temperature: {adiabatic_from: 650 K}' takes the"
+                  + " adiabatic flame temperature of air of 650 K");
+      return;
+    }
     Optional<String> way = z.exactlyOne(WAYS);
     if (way.isEmpty()) {
       return;
@@ -65,7 +73,7 @@ final class GasReader {
     switch (way.get()) {
       case "as" -> only(z, List.of("as"));
       case "sound_speed" -> given(z).ifPresent(g -> known.put(name, g));
-      default -> withTemperature(z).ifPresent(g -> known.put(name, g));
+      default -> withTemperature(name, z).ifPresent(g -> known.put(name, g));
     }
   }
 
@@ -106,8 +114,17 @@ final class GasReader {
     return Optional.of(new Gas.Given(c, rho));
   }
 
-  private static Optional<Gas.ZoneGas> withTemperature(Mapping z) {
-    Gas.Temperature temperature = temperature(z.get("temperature").orElseThrow());
+  private Optional<Gas.ZoneGas> withTemperature(String zone, Mapping z) {
+    Optional<Gas.Temperature> read =
+        new TemperatureReader(geometry, zone).read(z.get("temperature").orElseThrow());
+    if (read.isEmpty()) {
+      return Optional.empty();
+    }
+    Gas.Temperature temperature = read.get();
+    if (temperature instanceof Gas.Adiabatic && !z.has("mixture")) {
+      z.at("temperature")
+          .fault("an adiabatic temperature without a fuel", "add 'mixture: {fuel: …}'");
+    }
     if (z.has("mixture")) {
       only(z, List.of("temperature", "mixture"));
       return mixture(z.get("mixture").orElseThrow()).map(x -> new Gas.Mixed(temperature, x));
@@ -130,55 +147,23 @@ final class GasReader {
             z.number("gas_constant", QuantityKind.GAS_CONSTANT, Range.POSITIVE)));
   }
 
-  private static Gas.Temperature temperature(Entry entry) {
-    if (entry.isText()) {
-      double kelvin = entry.number(QuantityKind.TEMPERATURE, Range.POSITIVE);
-      if (kelvin > HOT) {
-        entry.caution(
-            "a temperature of " + entry.shown() + " is above any flame in air",
-            "check the value and its unit");
-      }
-      return new Gas.Uniform(kelvin);
-    }
-    Mapping m = Mapping.of(entry, CaseKeys.TEMPERATURE);
-    Optional<String> way = m.exactlyOne(List.of("profile", "file"));
-    if (way.equals(Optional.of("file"))) {
-      return new Gas.FromFile(CaseFolder.existing(m.get("file").orElseThrow()).orElse(null));
-    }
-    return way.map(w -> profile(Mapping.of(m.get(w).orElseThrow(), CaseKeys.PROFILE)))
-        .orElse(new Gas.Uniform(Double.NaN));
-  }
-
-  private static Gas.Temperature profile(Mapping p) {
-    List<Double> x =
-        p.get("x").map(e -> e.numbers(QuantityKind.LENGTH, Range.ANY)).orElse(List.of());
-    List<Double> t =
-        p.get("temperature")
-            .map(e -> e.numbers(QuantityKind.TEMPERATURE, Range.POSITIVE))
-            .orElse(List.of());
-    if (p.has("x") && p.has("temperature") && x.size() != t.size()) {
-      p.entry()
-          .fault(
-              x.size() + " stations but " + t.size() + " temperatures",
-              "give one temperature for each station");
-    }
-    for (int i = 1; i < x.size(); i++) {
-      if (x.get(i) <= x.get(i - 1)) {
-        p.get("x")
-            .orElseThrow()
-            .fault("station " + (i + 1) + " is not behind the one before", "sort by rising x");
-        break;
-      }
-    }
-    return new Gas.AlongAxis(List.copyOf(x), List.copyOf(t));
-  }
-
   private static Optional<Gas.Mixture> mixture(Entry entry) {
     if (entry.isText()) {
       return entry.choice(List.of("air")).map(w -> new Gas.Air());
     }
     Mapping m = Mapping.of(entry, CaseKeys.MIXTURE);
-    double ratio = m.number("equivalence_ratio", QuantityKind.FRACTION, Range.SHARE);
+    Gas.Air air = new Gas.Air(m.get("humid_air").map(GasReader::humidity));
+    if (!m.has("fuel")) {
+      if (m.has("equivalence_ratio") || m.has("progress") || !m.has("humid_air")) {
+        entry.fault("the key 'fuel' is missing", "name a fuel, or write 'mixture: air'");
+      }
+      return Optional.of(air);
+    }
+    if (!m.has("equivalence_ratio")) {
+      entry.fault("the key 'equivalence_ratio' is missing", "add 'equivalence_ratio: 0.5'");
+    }
+    double ratio = m.number("equivalence_ratio", QuantityKind.FRACTION, Range.SHARE, Double.NaN);
+    double progress = m.number("progress", QuantityKind.FRACTION, Range.PART, 1);
     Map<String, Double> fuel = new LinkedHashMap<>();
     Optional<Entry> parts = m.get("fuel");
     if (parts.isPresent() && parts.get().isText()) {
@@ -186,7 +171,15 @@ final class GasReader {
     } else {
       parts.ifPresent(e -> blend(Mapping.named(e), fuel));
     }
-    return Optional.of(new Gas.BurntFuel(fuel, ratio));
+    return Optional.of(new Gas.BurntFuel(fuel, ratio, progress, air));
+  }
+
+  private static Gas.Humidity humidity(Entry entry) {
+    Mapping m = Mapping.of(entry, CaseKeys.HUMID_AIR);
+    return new Gas.Humidity(
+        m.number("relative_humidity", QuantityKind.FRACTION, Range.PART),
+        m.number("temperature", QuantityKind.TEMPERATURE, Range.POSITIVE),
+        m.number("pressure", QuantityKind.PRESSURE, Range.POSITIVE));
   }
 
   private static void blend(Mapping parts, Map<String, Double> fuel) {

@@ -45,7 +45,10 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
     CaseGas gas = new CaseGas(caseFile);
     Medium medium = gas.on(shape.mesh());
     CaseFlames flames = new CaseFlames(caseFile);
-    if (shape.cells().isPresent() && flames.allBurnersAlike() && caseFile.dampers().isEmpty()) {
+    if (shape.cells().isPresent()
+        && flames.allBurnersAlike()
+        && caseFile.dampers().isEmpty()
+        && caseFile.gas().even()) {
       RingCells cells = shape.cells().get();
       BlochAssembly bloch =
           builder(caseFile, cells.half(), shape, gas.on(cells.half())).bloch(cells);
@@ -75,10 +78,18 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
     }
     String method =
         shape.cells().isPresent()
-            ? (flames.allBurnersAlike() ? "Dampers break the symmetry" : "The burners differ")
-                + ": the whole ring is solved."
+            ? whyWhole(caseFile, flames) + ": the whole ring is solved."
             : "The plane is solved as a whole.";
     return new CaseProblem(shape, medium, List.of(new Part("", null, 1, builder.build())), method);
+  }
+
+  private static String whyWhole(CaseFile caseFile, CaseFlames flames) {
+    if (!flames.allBurnersAlike()) {
+      return "The burners differ";
+    }
+    return caseFile.dampers().isEmpty()
+        ? "The temperature changes round the ring"
+        : "Dampers break the symmetry";
   }
 
   private static ProblemBuilder builder(
