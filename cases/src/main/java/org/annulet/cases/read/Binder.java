@@ -17,6 +17,7 @@ import org.annulet.cases.units.QuantityKind;
 final class Binder {
   private final String file;
   private final Path folder;
+  private final DataFiles dataFiles;
   private final Set<Problem> problems = new LinkedHashSet<>();
   private final Set<Problem> cautions = new LinkedHashSet<>();
   private final Map<String, CaseSource.Place> places = new HashMap<>();
@@ -29,8 +30,18 @@ final class Binder {
    * @param folder case folder, absolute
    */
   Binder(String file, Path folder) {
+    this(file, folder, new DataFiles());
+  }
+
+  /** A binder that shares what was made of data files. */
+  Binder(String file, Path folder, DataFiles dataFiles) {
     this.file = file;
     this.folder = folder;
+    this.dataFiles = dataFiles;
+  }
+
+  DataFiles dataFiles() {
+    return dataFiles;
   }
 
   String file() {

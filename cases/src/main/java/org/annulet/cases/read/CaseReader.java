@@ -26,6 +26,7 @@ public final class CaseReader {
 
   private final Path path;
   private final String shown;
+  private final DataFiles dataFiles = new DataFiles();
 
   private CaseReader(Path path, String shown) {
     this.path = path;
@@ -71,7 +72,7 @@ public final class CaseReader {
   }
 
   private Binder binder() {
-    return new Binder(shown, path.toAbsolutePath().normalize().getParent());
+    return new Binder(shown, path.toAbsolutePath().normalize().getParent(), dataFiles);
   }
 
   private Reading readFile(Map<String, String> changes) {

@@ -48,6 +48,13 @@ public record FrequencyTable(String file, double[] frequency, double[] re, doubl
 
   /** Reads the table an entry names. */
   static Optional<FrequencyTable> read(Entry entry) {
+    return entry
+        .binder()
+        .dataFiles()
+        .once("table|" + entry.text().orElse(""), FrequencyTable.class, () -> readFile(entry));
+  }
+
+  private static Optional<FrequencyTable> readFile(Entry entry) {
     Optional<CsvTable> table = CsvTable.read(entry, COLUMNS);
     if (table.isEmpty()) {
       return Optional.empty();

@@ -140,13 +140,33 @@ final class TemperatureReader {
         }
       }
     }
-    Optional<Points> points = vtu ? vtu(m, file.get()) : csv(entry);
     try {
-      return points.flatMap(p -> field(entry, p, sectors));
+      return entry
+          .binder()
+          .dataFiles()
+          .once(
+              key(m, file.get()),
+              Gas.Temperature.class,
+              () -> (vtu ? vtu(m, file.get()) : csv(entry)).flatMap(p -> field(entry, p, sectors)));
     } catch (IllegalArgumentException e) {
       entry.fault(file.get().getFileName() + ": " + e.getMessage(), "look at its points");
       return Optional.empty();
     }
+  }
+
+  /** Everything a field depends on: the file, how it is read, and where it is averaged. */
+  private String key(Mapping m, Path file) {
+    StringBuilder key = new StringBuilder(file.toString());
+    for (String k : List.of("array", "length_unit", "temperature_unit", "axis", "sectors")) {
+      key.append('|').append(m.get(k).flatMap(Entry::text).orElse(""));
+    }
+    if (geometry.orElseThrow() instanceof Geometry.Ring ring) {
+      key.append('|').append(ring.unrolledRadius());
+      if (ring.zoneNames().contains(zone)) {
+        key.append('|').append(ring.zone(zone));
+      }
+    }
+    return key.append('|').append(geometry.get().getClass()).toString();
   }
 
   /** Points of a file: in the plane (z null), at angles (theta), or in space. */
