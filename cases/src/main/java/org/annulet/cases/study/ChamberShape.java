@@ -227,7 +227,7 @@ public record ChamberShape(
     return b.build();
   }
 
-  private static Ring ringGeometry(Geometry.Ring ring) {
+  static Ring ringGeometry(Geometry.Ring ring) {
     Map<String, Ring.Annulus> zones = new LinkedHashMap<>();
     for (Geometry.RingZone z : ring.zones()) {
       double height =

@@ -6,6 +6,7 @@ import java.util.Map;
 import java.util.Optional;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseSource;
+import org.annulet.cases.read.Geometry;
 
 /**
  * One number of a case and the case with that number a little smaller and a little larger.
@@ -21,13 +22,14 @@ record InputChange(CaseSource.Value value, CaseFile smaller, CaseFile larger) {
    */
   static final double STEP = 2e-4;
 
-  /** Parts of a case that do not enter its operators, or only through the shape of the mesh. */
+  /** Parts of a case that do not enter its operators, or only through the mesh. */
   private static final List<String> NOT_INPUTS =
       List.of("geometry", "window", "studies", "outputs", "variants");
 
   /**
-   * The numbers of a case that can be changed by themselves on the same mesh: all but those that
-   * shape the mesh, those that are zero and those bound to others, as the parts of a blend.
+   * The numbers of a case that can be changed by themselves on the same mesh, which of a ring may
+   * be drawn out: all but those of an outline and of the mesh's sizes, those that are zero and
+   * those bound to others, as the parts of a blend.
    */
   static List<CaseSource.Value> candidates(CaseFile caseFile) {
     boolean ownDampers =
@@ -40,8 +42,16 @@ record InputChange(CaseSource.Value value, CaseFile smaller, CaseFile larger) {
         .filter(v -> ownDampers || !in("dampers", v.key()))
         .filter(v -> v.si() != 0 && Double.isFinite(v.si()))
         .filter(v -> !v.text().equals(CaseSource.Value.DEFAULT))
-        .filter(v -> NOT_INPUTS.stream().noneMatch(part -> in(part, v.key())))
+        .filter(
+            v ->
+                NOT_INPUTS.stream().noneMatch(part -> in(part, v.key()))
+                    || isRingDimension(caseFile, v.key()))
         .toList();
+  }
+
+  /** Length, gap, radius, bore or area of a ring's zone: the mesh can be drawn out to it. */
+  private static boolean isRingDimension(CaseFile caseFile, String key) {
+    return caseFile.geometry() instanceof Geometry.Ring && in("geometry.zones", key);
   }
 
   private static boolean in(String part, String key) {

@@ -10,6 +10,7 @@ import java.util.Optional;
 import java.util.TreeSet;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseSource;
+import org.annulet.cases.read.Geometry;
 import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.solver.derivative.DifferenceOfOperators;
 import org.annulet.solver.derivative.Slope;
@@ -72,8 +73,14 @@ final class Sensitivities {
       note(value);
       return Optional.empty();
     }
-    CaseProblem smaller = CaseProblem.on(change.get().smaller(), problem.shape());
-    CaseProblem larger = CaseProblem.on(change.get().larger(), problem.shape());
+    Optional<CaseProblem> less = problem(change.get().smaller());
+    Optional<CaseProblem> more = problem(change.get().larger());
+    if (less.isEmpty() || more.isEmpty()) {
+      note(value);
+      return Optional.empty();
+    }
+    CaseProblem smaller = less.get();
+    CaseProblem larger = more.get();
     List<Effect> effects = new ArrayList<>();
     for (DerivedModes g : groups) {
       if (!comparable(g, smaller) || !comparable(g, larger)) {
@@ -92,6 +99,17 @@ final class Sensitivities {
       }
     }
     return Optional.of(effects);
+  }
+
+  /** A changed case on the mesh at hand, drawn out where the dimensions of a ring differ. */
+  private Optional<CaseProblem> problem(CaseFile changed) {
+    Optional<ChamberShape> shape = Optional.of(problem.shape());
+    if (caseFile.geometry() instanceof Geometry.Ring from
+        && changed.geometry() instanceof Geometry.Ring to
+        && !from.equals(to)) {
+      shape = RingMorph.of(problem.shape(), from, to);
+    }
+    return shape.map(s -> CaseProblem.on(changed, s));
   }
 
   private void note(CaseSource.Value value) {
