@@ -46,7 +46,7 @@ enum CaseKeys {
   RESONATOR("neck_bore! necks neck_length! end_correction volume! resistance!"),
   QUARTER_WAVE("bore! length! end_correction resistance!"),
   DAMPER_PLACE("edge face x! y r count angles burners"),
-  FLAME("heat_release! place! reference reference_velocity response! staging"),
+  FLAME("heat_release! fuel_flow place! reference reference_velocity response! staging"),
   PLACE("sheet answer zone from to distance width"),
   REFERENCE("edge quantity flow_from zone from to distance width direction"),
   RESPONSE("gain delay delay_deviation cutoff sum table low_frequency_limit"),

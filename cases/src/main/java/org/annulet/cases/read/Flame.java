@@ -8,6 +8,8 @@ import java.util.OptionalDouble;
  *
  * @param name of the flame
  * @param heatRelease mean, all burners together, in W
+ * @param fuelFlow mass flow of fuel, all burners together, in kg/s, to check the heat release
+ *     against; empty when not given
  * @param place where the heat is released
  * @param reference where the velocity is taken that it answers to
  * @param referenceVelocity mean velocity there in m/s; NaN for a flame that answers to pressure
@@ -17,6 +19,7 @@ import java.util.OptionalDouble;
 public record Flame(
     String name,
     double heatRelease,
+    OptionalDouble fuelFlow,
     Place place,
     Reference reference,
     double referenceVelocity,

@@ -49,7 +49,15 @@ final class FlameReader {
       pointwise(m, place.get(), reference.get());
       if (response.isPresent()) {
         flames.add(
-            new Flame(name, heat, place.get(), reference.get(), velocity, response.get(), staging));
+            new Flame(
+                name,
+                heat,
+                optional(m, "fuel_flow", QuantityKind.MASS_FLOW, Range.POSITIVE),
+                place.get(),
+                reference.get(),
+                velocity,
+                response.get(),
+                staging));
       }
     }
   }

@@ -152,7 +152,8 @@ public record Gas(double meanPressure, Map<String, ZoneGas> zones) {
         .noneMatch(z -> temperature(z) instanceof FromFile f && f.round() == Round.UNEVEN);
   }
 
-  private static Temperature temperature(ZoneGas zone) {
+  /** The temperature of a zone; null where sound speed and density are given. */
+  public static Temperature temperature(ZoneGas zone) {
     if (zone instanceof Perfect g) {
       return g.temperature();
     }

@@ -77,6 +77,9 @@ public final class ModesStudy {
     notes.add(problem.method());
     List<ModeEntry> inside = withDerivatives(label(chamber, found.inside), found, chamber, notes);
     List<ModeEntry> outside = label(chamber, found.outside);
+    CaseCheck.of(
+            caseFile, problem.shape().mesh(), new CaseGas(caseFile).mapped(problem.shape().mesh()))
+        .forEach(p -> notes.add(p.what() + "."));
     if (problem.shape().geometry() instanceof Ring ring) {
       ThinGap.sentence(ring, inside, chamber.mesh().zoneNames()).ifPresent(notes::add);
     }

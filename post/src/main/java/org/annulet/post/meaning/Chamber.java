@@ -167,7 +167,7 @@ public final class Chamber {
   }
 
   /** True length of arc per unit of y in zone {@code z}: R_z/R₀ on a ring, else 1. */
-  double arcScale(int z) {
+  public double arcScale(int z) {
     return kind == GeometryKind.RING ? zoneRadius[z] * 2 * Math.PI / mesh.period() : 1;
   }
 }
