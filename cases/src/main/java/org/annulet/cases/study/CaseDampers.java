@@ -85,7 +85,7 @@ final class CaseDampers {
   }
 
   /** Density and sound speed in the damper: of the zone it names, or at its mouth. */
-  private static double[] gas(Damper damper, Damper.Place place, Mesh mesh, Medium medium) {
+  static double[] gas(Damper damper, Damper.Place place, Mesh mesh, Medium medium) {
     List<Integer> triangles = new ArrayList<>();
     String zone = damper.gasOf();
     if (zone.isEmpty() && place instanceof Damper.OnEdge e) {

@@ -6,31 +6,26 @@ import java.util.List;
 import java.util.stream.IntStream;
 import org.annulet.solver.dense.ComplexLu;
 import org.annulet.solver.dense.ComplexMatrix;
-import org.annulet.solver.dense.OrthonormalColumns;
 import org.annulet.solver.eigen.OperatorAt;
 import org.annulet.solver.eigen.PreparedOperator;
 import org.annulet.solver.modes.Window;
-import org.annulet.solver.operator.AcousticOperator;
-import org.annulet.solver.operator.AnalyticFunction;
-import org.annulet.solver.operator.LowRankTerm;
 import org.annulet.solver.operator.SparseVector;
 import org.apache.commons.math3.complex.Complex;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
-import org.apache.commons.math3.linear.QRDecomposition;
 import org.apache.commons.math3.linear.RealMatrix;
+import org.apache.commons.math3.linear.SingularValueDecomposition;
 
 /**
  * Finds H(s) of a chamber: residues by block inverse iteration at its modes, the smooth part by
  * least squares on full solves round a region, and a check by full solves inside it.
  */
 public final class PortSampling {
-  private static final double BESIDE = 1e-8;
-  private static final int ITERATIONS = 4;
-
   /** Polynomials are added until the check is met or the samples run out. */
-  private static final double WANTED = 1e-8;
+  private static final double WANTED = 1e-6;
 
-  private static final int[] DEGREES = {12, 20, 30};
+  private static final double UNSEEN = 1e-8;
+
+  private static final int[] DEGREES = {20, 32};
 
   private final PreparedOperator operator;
   private final PreparedOperator turned;
@@ -41,7 +36,7 @@ public final class PortSampling {
 
   private PortSampling(PreparedOperator operator, List<SparseVector> ports, Window region) {
     this.operator = operator;
-    this.turned = new PreparedOperator(transposed(operator.operator()), operator.analysis());
+    this.turned = Eigenspace.transposed(operator);
     this.ports = List.copyOf(ports);
     this.region = region;
     this.centre =
@@ -95,7 +90,8 @@ public final class PortSampling {
     PortTransfer best = null;
     for (int degree : DEGREES) {
       List<Complex> round = round(degree);
-      PortTransfer.Fit none = new PortTransfer.Fit(centre, halfHeight, new double[2][2][p2]);
+      PortTransfer.Fit none =
+          new PortTransfer.Fit(centre, halfHeight, new double[0], new double[2][0][p2]);
       PortTransfer bare =
           new PortTransfer(ports.size(), region, corrected, terms, none, Double.NaN);
       PortTransfer.Fit fit = fit(degree, round, sample(round), bare);
@@ -114,38 +110,19 @@ public final class PortSampling {
   }
 
   private Residue residue(PortPole pole) {
+    Eigenspace space = Eigenspace.of(operator, turned, pole);
     int m = pole.multiplicity();
-    int n = operator.size();
-    Complex s = pole.s();
-    OperatorAt near = operator.at(s.add(new Complex(0.6, 0.8).multiply(BESIDE * s.abs())));
-    ComplexMatrix x = start(n, m, 1);
-    ComplexMatrix q = start(n, m, 2);
-    for (int k = 0; k < ITERATIONS; k++) {
-      x = operator.derivativeTimes(s, x);
-      near.solve(x);
-      x = OrthonormalColumns.of(x, 0);
-      q = turned.derivativeTimes(s, q);
-      near.solveTransposed(q);
-      q = OrthonormalColumns.of(q, 0);
-    }
-    ComplexMatrix norm = transposeTimes(q, operator.derivativeTimes(s, x));
-    ComplexMatrix miss = transposeTimes(q, operator.times(s, x));
-    new ComplexLu(norm.copy()).solve(miss);
-    Complex shift = Complex.ZERO;
-    for (int j = 0; j < m; j++) {
-      shift = shift.subtract(miss.get(j, j).divide(m));
-    }
-    ComplexMatrix left = portsTimes(q); // BᵀQ, ports × m
-    ComplexMatrix right = portsTimes(x);
+    ComplexMatrix left = portsTimes(space.left()); // BᵀQ, ports × m
+    ComplexMatrix right = portsTimes(space.right());
     ComplexMatrix scaled = new ComplexMatrix(m, ports.size());
     for (int i = 0; i < m; i++) {
       for (int j = 0; j < ports.size(); j++) {
         scaled.set(i, j, left.get(j, i));
       }
     }
-    new ComplexLu(norm).solve(scaled);
+    new ComplexLu(space.norm().copy()).solve(scaled);
     ComplexMatrix residue = right.times(scaled);
-    return new Residue(s.add(shift), m, rows(residue, 0), rows(residue, 1));
+    return new Residue(space.mean(), m, rows(residue, 0), rows(residue, 1));
   }
 
   private double[] rows(ComplexMatrix a, int part) {
@@ -169,29 +146,6 @@ public final class PortSampling {
     return y;
   }
 
-  /** Fixed columns without symmetry, so that every mode has a share in them. */
-  private static ComplexMatrix start(int n, int columns, int kind) {
-    ComplexMatrix x = new ComplexMatrix(n, columns);
-    for (int j = 0; j < columns; j++) {
-      for (int i = 0; i < n; i++) {
-        double turn = (i + 1) * (0.6180339887498949 + 0.1 * j + 0.37 * kind);
-        x.re()[j][i] = turn - Math.floor(turn) - 0.5;
-        x.im()[j][i] = 1.7 * turn - Math.floor(1.7 * turn) - 0.5;
-      }
-    }
-    return x;
-  }
-
-  private static ComplexMatrix transposeTimes(ComplexMatrix x, ComplexMatrix y) {
-    ComplexMatrix conjugate = x.copy();
-    for (double[] column : conjugate.im()) {
-      for (int i = 0; i < column.length; i++) {
-        column[i] = -column[i];
-      }
-    }
-    return conjugate.adjointTimes(y);
-  }
-
   /** Points on the edge of the region, dense towards its corners. */
   private List<Complex> round(int degree) {
     List<Complex> points = new ArrayList<>();
@@ -203,7 +157,7 @@ public final class PortSampling {
       points.add(new Complex(region.lowestGrowth(), omega));
       points.add(new Complex(region.highestGrowth(), omega));
     }
-    int across = 4;
+    int across = 8;
     for (int k = 0; k < across; k++) {
       double sigma =
           centre.getReal()
@@ -254,7 +208,7 @@ public final class PortSampling {
 
   private PortTransfer.Fit fit(
       int degree, List<Complex> points, List<double[][]> samples, PortTransfer bare) {
-    int functions = degree + 3;
+    int functions = degree + 1 + sources().length;
     int p2 = ports.size() * ports.size();
     int m = points.size();
     int[] everyPort = IntStream.range(0, ports.size()).toArray();
@@ -282,7 +236,7 @@ public final class PortSampling {
       scale[j] = 1 / a.getColumnVector(j).getNorm();
       a.setColumnVector(j, a.getColumnVector(j).mapMultiply(scale[j]));
     }
-    RealMatrix x = new QRDecomposition(a).getSolver().solve(rhs);
+    RealMatrix x = solved(a, rhs);
     double[][][] coefficient = new double[2][functions][p2];
     for (int j = 0; j < functions; j++) {
       for (int q = 0; q < p2; q++) {
@@ -290,20 +244,49 @@ public final class PortSampling {
         coefficient[1][j][q] = scale[functions + j] * x.getEntry(functions + j, q);
       }
     }
-    return new PortTransfer.Fit(centre, halfHeight, coefficient);
+    return new PortTransfer.Fit(centre, halfHeight, sources(), coefficient);
+  }
+
+  /**
+   * Least squares without the directions the samples hardly see: they would bring huge coefficients
+   * that cancel, and with them rounding.
+   */
+  private static RealMatrix solved(RealMatrix a, RealMatrix rhs) {
+    SingularValueDecomposition svd = new SingularValueDecomposition(a);
+    double[] sigma = svd.getSingularValues();
+    RealMatrix y = svd.getUT().multiply(rhs);
+    for (int i = 0; i < y.getRowDimension(); i++) {
+      double factor = i < sigma.length && sigma[i] > UNSEEN * sigma[0] ? 1 / sigma[i] : 0;
+      for (int q = 0; q < y.getColumnDimension(); q++) {
+        y.multiplyEntry(i, q, factor);
+      }
+    }
+    return svd.getV().multiply(y);
   }
 
   private Complex[] functions(Complex s, int degree) {
-    Complex[] f = new Complex[degree + 3];
+    double[] sources = sources();
+    Complex[] f = new Complex[degree + 1 + sources.length];
     Complex z = s.subtract(centre).divide(new Complex(0, halfHeight));
     f[0] = Complex.ONE;
     f[1] = z;
     for (int k = 2; k <= degree; k++) {
       f[k] = z.multiply(2).multiply(f[k - 1]).subtract(f[k - 2]);
     }
-    f[degree + 1] = s.reciprocal();
-    f[degree + 2] = s.multiply(s).reciprocal();
+    for (int k = 0; k < sources.length; k++) {
+      f[degree + 1 + k] = s.subtract(sources[k]).reciprocal();
+    }
     return f;
+  }
+
+  /**
+   * Poles on the real axis below the region: what is left there (pressure that leaks away without
+   * swinging, and the double root s = 0 of a closed chamber) is drawn together into them.
+   */
+  private double[] sources() {
+    double low = 2 * Math.PI * region.lowestFrequency();
+    double[] at = {-4, -2.5, -1.6, -1, -0.6, -0.3, -0.1, 0, 0.1, 0.3, 0.6, 1, 1.6};
+    return Arrays.stream(at).map(x -> x * low).toArray();
   }
 
   private double error(PortTransfer tried, List<Complex> points, List<double[][]> truth) {
@@ -324,26 +307,5 @@ public final class PortSampling {
       worst = Math.max(worst, miss / largest);
     }
     return worst;
-  }
-
-  /** Lᵀ: the low-rank terms with their sides exchanged. */
-  private static AcousticOperator transposed(AcousticOperator operator) {
-    List<LowRankTerm> terms = new ArrayList<>();
-    for (LowRankTerm term : operator.lowRankTerms()) {
-      AnalyticFunction[][] phi = new AnalyticFunction[term.right().size()][term.left().size()];
-      for (int i = 0; i < term.left().size(); i++) {
-        for (int j = 0; j < term.right().size(); j++) {
-          phi[j][i] = term.coefficient()[i][j];
-        }
-      }
-      terms.add(new LowRankTerm(term.name(), term.right(), term.left(), phi));
-    }
-    return new AcousticOperator(
-        operator.pattern(),
-        operator.stiffness(),
-        operator.mass(),
-        operator.sparseTerms(),
-        terms,
-        operator.coordinates());
   }
 }

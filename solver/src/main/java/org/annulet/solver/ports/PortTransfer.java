@@ -26,11 +26,11 @@ public final class PortTransfer {
   record Terms(double[][] at, double[][][] residue) {}
 
   /**
-   * Chebyshev polynomials in (s − centre)/(i · halfHeight), then 1/s and 1/s².
+   * Chebyshev polynomials in (s − centre)/(i · halfHeight), then 1/(s − source).
    *
    * @param coefficient {re, im}, shape [2][functions][ports²]
    */
-  record Fit(Complex centre, double halfHeight, double[][][] coefficient) {}
+  record Fit(Complex centre, double halfHeight, double[] sources, double[][][] coefficient) {}
 
   PortTransfer(int ports, Window region, List<PortPole> poles, Terms terms, Fit fit, double error) {
     this.ports = ports;
@@ -130,7 +130,7 @@ public final class PortTransfer {
     }
 
     private void polynomials(double sr, double si, double[][] h) {
-      int n = coefRe.length - 2;
+      int n = coefRe.length - fit.sources().length;
       double zr = (si - fit.centre().getImaginary()) / fit.halfHeight();
       double zi = -(sr - fit.centre().getReal()) / fit.halfHeight();
       double[] before = {0, 0, 0, 0};
@@ -153,15 +153,17 @@ public final class PortTransfer {
         now = next;
         next = free;
       }
-      double norm = sr * sr + si * si;
-      double ir = sr / norm;
-      double ii = -si / norm;
-      double qr = ir * ir - ii * ii;
-      double qi = 2 * ir * ii;
-      add(h, coefRe[n], coefIm[n], new double[] {ir, ii, -qr, -qi});
-      double cr = qr * ir - qi * ii;
-      double ci = qr * ii + qi * ir;
-      add(h, coefRe[n + 1], coefIm[n + 1], new double[] {qr, qi, -2 * cr, -2 * ci});
+      for (int k = 0; k < fit.sources().length; k++) {
+        double dr = sr - fit.sources()[k];
+        double norm = dr * dr + si * si;
+        double ir = dr / norm;
+        double ii = -si / norm;
+        f[0] = ir;
+        f[1] = ii;
+        f[2] = -(ir * ir - ii * ii);
+        f[3] = -2 * ir * ii;
+        add(h, coefRe[n + k], coefIm[n + k], f);
+      }
     }
 
     private void add(double[][] h, double[] re, double[] im, double[] f) {

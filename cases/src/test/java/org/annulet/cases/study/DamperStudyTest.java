@@ -1,0 +1,114 @@
+package org.annulet.cases.study;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
+
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Map;
+import java.util.TreeMap;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.CaseReader;
+import org.annulet.solver.eigen.ModeSearch;
+import org.annulet.solver.eigen.SearchSettings;
+import org.annulet.solver.modes.Mode;
+import org.annulet.solver.modes.ModeSet;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+
+/** The search for places against solving every pattern in full. */
+class DamperStudyTest {
+  static final String RING =
+      """
+      annulet: 1
+      title: small ring with flames
+      geometry:
+        kind: ring
+        burner_count: 6
+        mesh_size: 80 mm
+        mesh_size_at: {burners: 40 mm}
+        zones:
+          - {name: burners, shape: ducts,   mean_radius: 300 mm, bore: 60 mm, length: 100 mm}
+          - {name: chamber, shape: annulus, mean_radius: 300 mm, gap: 110 mm, length: 250 mm}
+      gas:
+        mean_pressure: 10 bar
+        zones:
+          burners: {temperature: 650 K, gamma: 1.37, gas_constant: 287 J/(kg K)}
+          chamber: {temperature: 1700 K, gamma: 1.29, gas_constant: 297 J/(kg K)}
+      walls: {chamber.downstream: {admittance: 0.04}, burners.upstream: {impedance: 0.4}}
+      flames:
+        main:
+          heat_release: 6 MW
+          place: {sheet: burners.outlet}
+          reference_velocity: 50 m/s
+          response: {gain: 0.7, delay: 2.2 ms}
+          %s
+      window: {frequency: [250 Hz, 600 Hz], growth_rate: [-500, 400, 1/s]}
+      studies:
+        dampers:
+          designs:
+            low: {count: 2, resonator: {neck_bore: 24 mm, neck_length: 25 mm, volume: 1400 cm3, resistance: 0.1}, mouth_width: 110 mm}
+          positions: {face: chamber.outer_face, x: 180 mm, burners: all}
+      """;
+
+  @TempDir private Path folder;
+
+  private CaseFile read(String text) throws Exception {
+    return CaseReader.read(Files.writeString(folder.resolve("case.yaml"), text)).orThrow();
+  }
+
+  private static double fullWorst(DamperPorts ports, int[] pattern) {
+    ModeSet set =
+        ModeSearch.find(
+            CaseProblem.on(ports.with(pattern), ports.shape())
+                .parts()
+                .get(0)
+                .assembled()
+                .operator(),
+            ports.window(),
+            SearchSettings.standard());
+    assertThat(set.complete()).isTrue();
+    return set.modes().stream().mapToDouble(Mode::growthRate).max().orElseThrow();
+  }
+
+  /** Every pair of positions, solved on the full operator by the ordinary search with its count. */
+  @ParameterizedTest
+  @ValueSource(strings = {"", "staging: [{burners: [1, 2], gain: 0.4}]"})
+  void bestPattern_isTheBestOfAllSolvedInFull(String staging) throws Exception {
+    CaseFile caseFile = read(String.format(RING, staging));
+    DamperStudy.Answer answer = new DamperStudy(caseFile, Progress.SILENT).run().answer();
+    DamperPorts ports = answer.ports();
+    assertThat(ports.transfer().error()).isLessThan(1e-6);
+    Map<String, Double> ranked = new TreeMap<>();
+    DamperPatterns patterns = new DamperPatterns(caseFile, ports.search());
+    double best = Double.POSITIVE_INFINITY;
+    for (int a = 0; a < 6; a++) {
+      for (int b = 0; b < a; b++) {
+        int[] pattern = new int[6];
+        pattern[a] = 1;
+        pattern[b] = 1;
+        String own = Arrays.toString(patterns.representative(pattern));
+        if (!ranked.containsKey(own) || a + b == 3) { // some images too: they must give the same
+          double worst = fullWorst(ports, pattern);
+          assertThat(worst).isCloseTo(ranked.getOrDefault(own, worst), within(1e-5));
+          ranked.put(own, worst);
+          best = Math.min(best, worst);
+        }
+      }
+    }
+    List<DamperRanking.Ranked> found = answer.outcome().best();
+    assertThat(found.get(0).worst()).isCloseTo(best, within(1e-4));
+    assertThat(answer.outcome().distinct()).isEqualTo(ranked.size());
+    assertThat(ranked).hasSize(staging.isEmpty() ? 3 : 9);
+    for (DamperRanking.Ranked r : found) {
+      assertThat(r.complete()).isTrue();
+      assertThat(r.worst()).isCloseTo(ranked.get(Arrays.toString(r.pattern())), within(1e-4));
+    }
+    assertThat(answer.certified()).isTrue();
+    assertThat(answer.check().worst()).isCloseTo(best, within(1e-6));
+    assertThat(answer.check().difference()).isLessThan(1e-3);
+  }
+}
