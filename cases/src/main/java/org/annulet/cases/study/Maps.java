@@ -1,11 +1,15 @@
 package org.annulet.cases.study;
 
+import java.util.Comparator;
 import java.util.IdentityHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import org.annulet.post.meaning.Chamber;
+import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeMaps;
+import org.annulet.post.meaning.Place;
 import org.annulet.solver.assembly.AssembledProblem;
 import org.annulet.solver.assembly.NodalField;
 import org.annulet.solver.dense.ComplexLu;
@@ -43,6 +47,28 @@ final class Maps {
       }
     }
     return maps;
+  }
+
+  /** Where a damper acts most on the least stable mode; empty where none acts. */
+  static Optional<String> sentence(Chamber chamber, List<ModeEntry> modes) {
+    return modes.stream()
+        .filter(e -> e.maps().isPresent())
+        .max(Comparator.comparingDouble(e -> e.view().mode().growthRate()))
+        .flatMap(
+            e -> {
+              double[] map = e.maps().orElseThrow().damper();
+              int best = ModeMaps.best(map);
+              return best < 0 || map[best] >= 0
+                  ? Optional.empty()
+                  : Optional.of(
+                      String.format(
+                          Locale.ROOT,
+                          "A small tuned damper (Z = ρc) acts most on mode %d, the least stable, at"
+                              + " %s: %.2g 1/s per cm² in first order.",
+                          modes.indexOf(e) + 1,
+                          Place.words(chamber, best, map),
+                          1e-4 * map[best]));
+            });
   }
 
   private AssembledProblem assembled(DerivedModes g) {

@@ -13,6 +13,7 @@ import org.annulet.cases.read.CaseFile;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.meaning.Certificate;
 import org.annulet.post.meaning.Chamber;
+import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
@@ -112,11 +113,15 @@ public final class ModesStudy {
               + String.join(", ", study.leftOut())
               + ".");
     }
+    if (chamber.kind() != GeometryKind.RING) {
+      notes.add("Sensitivities to the shape of the outline are not computed.");
+    }
     List<ModeEntry> out = new ArrayList<>();
     for (int i = 0; i < entries.size(); i++) {
       Mode own = found.inside.get(i).own;
       out.add(entries.get(i).with(tables.get(own)).with(maps.get(own)));
     }
+    Maps.sentence(chamber, out).ifPresent(notes::add);
     return out;
   }
 
