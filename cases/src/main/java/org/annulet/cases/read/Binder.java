@@ -93,7 +93,7 @@ final class Binder {
 
   /** What was read, and how to read it again with some values replaced. */
   CaseSource source(Function<Map<String, String>, Reading> again) {
-    return new CaseSource(file, places, values, again);
+    return new CaseSource(file, places, values, dataFiles, again);
   }
 
   private static List<Problem> sorted(Set<Problem> all) {

@@ -11,12 +11,14 @@ import org.annulet.cases.units.QuantityKind;
  * @param file file name as the user knows it
  * @param places line and column by key path, as in {@code walls.chamber.downstream}
  * @param values every dimensional value read, in the order of reading
+ * @param dataFiles what was made of its data files, shared with all changes of the case
  * @param again reads the same text once more with some values replaced: new text by key path
  */
 public record CaseSource(
     String file,
     Map<String, Place> places,
     List<Value> values,
+    DataFiles dataFiles,
     Function<Map<String, String>, Reading> again) {
   /** Copies the collections. */
   public CaseSource {

@@ -2,6 +2,7 @@ package org.annulet.cases.study;
 
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.TreeMap;
 import org.annulet.cases.read.CaseFile;
@@ -40,12 +41,12 @@ final class CaseFlames {
   }
 
   private org.annulet.solver.flame.Flame solverFlame(Flame f) {
-    Firing rule = new Firing(f.heatRelease(), response(f.response()));
+    Firing rule = new Firing(f.heatRelease(), once(f.response()));
     Map<Integer, Firing> staging = new TreeMap<>();
     if (caseFile.geometry() instanceof Geometry.Ring ring && !f.staging().isEmpty()) {
       for (int burner = 1; burner <= ring.burnerCount(); burner++) {
         Firing here =
-            new Firing(f.heatRelease() * f.heatShareAt(burner), response(f.responseAt(burner)));
+            new Firing(f.heatRelease() * f.heatShareAt(burner), once(f.responseAt(burner)));
         if (!here.equals(rule)) {
           staging.put(burner, here);
         }
@@ -53,6 +54,15 @@ final class CaseFlames {
     }
     return new org.annulet.solver.flame.Flame(
         f.name(), place(f.place()), reference(f), rule, staging);
+  }
+
+  /** The solver's response; a table is fitted once for the case and all its changes. */
+  private Response once(Flame.Response response) {
+    return caseFile
+        .source()
+        .dataFiles()
+        .once(response, Response.class, () -> Optional.of(response(response)))
+        .orElseThrow();
   }
 
   /** The solver's response; a table is fitted, see {@link FittedResponse}. */

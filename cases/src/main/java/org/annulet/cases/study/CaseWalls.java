@@ -1,6 +1,7 @@
 package org.annulet.cases.study;
 
 import java.util.List;
+import java.util.Optional;
 import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.FrequencyTable;
@@ -40,11 +41,11 @@ final class CaseWalls {
             (name, wall) -> {
               try {
                 if (name.endsWith(INNER)) {
-                  builder.face(stem(name, INNER), Face.INNER, solverWall(wall));
+                  builder.face(stem(name, INNER), Face.INNER, solverWall(caseFile, wall));
                 } else if (name.endsWith(OUTER)) {
-                  builder.face(stem(name, OUTER), Face.OUTER, solverWall(wall));
+                  builder.face(stem(name, OUTER), Face.OUTER, solverWall(caseFile, wall));
                 } else {
-                  builder.wall(name, solverWall(wall));
+                  builder.wall(name, solverWall(caseFile, wall));
                 }
               } catch (IllegalArgumentException e) {
                 throw new CaseFaultException(
@@ -60,7 +61,7 @@ final class CaseWalls {
     return name.substring(0, name.length() - ending.length());
   }
 
-  private static org.annulet.solver.boundary.Wall solverWall(Wall wall) {
+  private static org.annulet.solver.boundary.Wall solverWall(CaseFile caseFile, Wall wall) {
     if (wall instanceof Wall.Open) {
       return new OpenEnd();
     }
@@ -74,7 +75,11 @@ final class CaseWalls {
       return new ChokedNozzle(nozzle.mach());
     }
     if (wall instanceof Wall.Tabulated t) {
-      return fitted(t);
+      return caseFile
+          .source()
+          .dataFiles()
+          .once(t, FittedWall.class, () -> Optional.of(fitted(t)))
+          .orElseThrow();
     }
     if (wall instanceof Wall.Perforated p) {
       return new PerforatedLiner(
