@@ -75,12 +75,12 @@ class MapsTest {
         title: Small ring
         geometry:
           kind: ring
-          burner_count: 4
+          burner_count: 6
           unrolled_radius: 150 mm
-          mesh_size: 35 mm
+          mesh_size: 45 mm
           zones:
             - {name: plenum,  shape: annulus, mean_radius: 160 mm, gap: 60 mm, length: 120 mm}
-            - {name: burners, shape: ducts,   mean_radius: 155 mm, bore: 50 mm, length: 60 mm}
+            - {name: burners, shape: ducts,   mean_radius: 155 mm, bore: 45 mm, length: 60 mm}
             - {name: chamber, shape: annulus, mean_radius: 150 mm, gap: 80 mm, length: 200 mm}
         gas:
           mean_pressure: 6 bar
@@ -100,7 +100,7 @@ class MapsTest {
             reference_velocity: 50 m/s
             response: {gain: 0.8, delay: 1.6 ms}
             STAGING
-        window: {frequency: [200 Hz, 800 Hz], growth_rate: [-500 1/s, 500 1/s]}
+        window: {frequency: [500 Hz, 600 Hz], growth_rate: [-150 1/s, 150 1/s]}
         outputs: {field_files: none}
         """
         .replace("STAGING", staging);
@@ -108,10 +108,12 @@ class MapsTest {
 
   /** One run each for burner cells and whole ring; both laws on every mode. */
   @ParameterizedTest
-  @ValueSource(strings = {"", "staging: [{burners: [1], delay: 2 ms}]"})
+  @ValueSource(strings = {"", "staging: [{burners: every_second, delay: 2 ms}]"})
   void mapsOfARing_sumUpToLinerAndFlames(String staging, @TempDir Path folder) throws IOException {
     ModesStudy.Answer answer = solve(folder, ring(staging));
-    assertThat(answer.results().modes()).hasSizeGreaterThan(2);
+    assertThat(answer.results().modes()).hasSizeGreaterThan(1);
+    assertThat(answer.results().modes()) // burners alternate: still threefold, so pairs stay exact
+        .anyMatch(e -> e.view().mode().multiplicity() == 2);
     for (ModeEntry e : answer.results().modes()) {
       damperMapSummedOverALinedFaceIsTheSensitivityToItsAdmittance(answer.chamber(), e);
       driveMapAddsUpToTheFlamesShareOfTheGrowthRate(answer.chamber(), e);
@@ -140,7 +142,9 @@ class MapsTest {
             .orElseThrow();
     double expected = 100 * row.growthPerPercent();
     // ρc of a node at the joint of two gases is a mean; the rest is lumping, h² k²
-    assertThat(0.04 * sum).as(e.label().text()).isCloseTo(expected, within(0.04 * -expected));
+    assertThat(0.04 * sum)
+        .as(e.label().text())
+        .isCloseTo(expected, within(0.04 * Math.abs(expected)));
   }
 
   private static void driveMapAddsUpToTheFlamesShareOfTheGrowthRate(Chamber chamber, ModeEntry e) {
