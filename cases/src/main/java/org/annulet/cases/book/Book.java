@@ -52,7 +52,9 @@ public final class Book {
   public SolvedChamber solve(String chamber, String version) throws IOException {
     CaseFile caseFile = caseFile(chamber);
     return SolvedChamber.of(
-        chamber, new ModesStudy(caseFile, Progress.SILENT).run(version).results(), known(chamber));
+        chamber,
+        new ModesStudy(caseFile, Progress.SILENT).modesOnly().run(version).results(),
+        known(chamber));
   }
 
   /**

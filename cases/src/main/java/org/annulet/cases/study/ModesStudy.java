@@ -41,13 +41,30 @@ public final class ModesStudy {
   /** Nested meshes: three show the order of convergence of each mode. */
   private static final int LEVELS = 3;
 
+  /** How much is asked of each mode. */
+  private enum Depth {
+    MODES,
+    WITH_DERIVATIVES
+  }
+
   private final CaseFile caseFile;
   private final Progress progress;
+  private final Depth depth;
 
   /** A study of one case that says how far it is. */
   public ModesStudy(CaseFile caseFile, Progress progress) {
+    this(caseFile, progress, Depth.WITH_DERIVATIVES);
+  }
+
+  private ModesStudy(CaseFile caseFile, Progress progress, Depth depth) {
     this.caseFile = caseFile;
     this.progress = progress;
+    this.depth = depth;
+  }
+
+  /** The same without sensitivities and maps, for those who want the modes alone. */
+  public ModesStudy modesOnly() {
+    return new ModesStudy(caseFile, progress, Depth.MODES);
   }
 
   /**
@@ -76,7 +93,9 @@ public final class ModesStudy {
     Chamber chamber = GasVolume.of(problem);
     List<String> notes = new ArrayList<>();
     notes.add(problem.method());
-    List<ModeEntry> inside = withDerivatives(label(chamber, found.inside), found, chamber, notes);
+    List<ModeEntry> labelled = label(chamber, found.inside);
+    List<ModeEntry> inside =
+        depth == Depth.MODES ? labelled : withDerivatives(labelled, found, chamber, notes);
     List<ModeEntry> outside = label(chamber, found.outside);
     CaseCheck.of(
             caseFile, problem.shape().mesh(), new CaseGas(caseFile).mapped(problem.shape().mesh()))

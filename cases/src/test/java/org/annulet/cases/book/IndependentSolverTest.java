@@ -144,7 +144,7 @@ class IndependentSolverTest {
   private static List<ModeView> ours(String chamber, Map<String, String> changes) {
     List<ModeView> views = new ArrayList<>();
     new ModesStudy(caseFile(chamber, changes), Progress.SILENT)
-        .run("test").results().modes().stream()
+        .modesOnly().run("test").results().modes().stream()
             .map(e -> e.view())
             .filter(v -> v.order() == null || v.order() >= 0)
             .forEach(views::add);

@@ -213,7 +213,10 @@ class ErrorBarsTest {
   private Results solve(String body) throws IOException {
     Path file = folder.resolve("case.yaml");
     Files.writeString(file, "annulet: 1\ntitle: a family with a known answer\n" + body);
-    return new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT).run("test").results();
+    return new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT)
+        .modesOnly()
+        .run("test")
+        .results();
   }
 
   private static List<ModeView> views(Results results) {

@@ -178,7 +178,10 @@ class RingAgainstTransferMatrixTest {
             DELAY);
     Path file = folder.resolve("case.yaml");
     Files.writeString(file, text);
-    return new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT).run("test").results();
+    return new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT)
+        .modesOnly()
+        .run("test")
+        .results();
   }
 
   private static List<Mode> orderZero(Results results) {

@@ -61,7 +61,10 @@ class TablesOverFrequencyTest {
         Files.writeString(
             folder.resolve("case.yaml"), DUCT.replace("WALL", wall).replace("RESPONSE", response));
     var results =
-        new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT).run("test").results();
+        new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT)
+            .modesOnly()
+            .run("test")
+            .results();
     assertThat(results.complete()).isTrue();
     return results.modes().stream().map(ModeEntry::view).map(v -> v.mode()).toList();
   }

@@ -53,7 +53,10 @@ class TemperatureFieldsTest {
 
   private static List<Mode> modes(CaseFile caseFile) {
     return new ModesStudy(caseFile, Progress.SILENT)
-        .run("test").results().modes().stream().map(ModeEntry::view).map(v -> v.mode()).toList();
+        .modesOnly().run("test").results().modes().stream()
+            .map(ModeEntry::view)
+            .map(v -> v.mode())
+            .toList();
   }
 
   private static void same(List<Mode> a, List<Mode> b, double relative) {
@@ -201,7 +204,10 @@ class TemperatureFieldsTest {
             window: {frequency: [150 Hz, 600 Hz], growth_rate: [-50 1/s, 50 1/s]}
             """);
     Results results =
-        new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT).run("test").results();
+        new ModesStudy(CaseReader.read(file).orThrow(), Progress.SILENT)
+            .modesOnly()
+            .run("test")
+            .results();
     assertThat(results.notes().toString()).contains("temperature changes round the ring");
     List<Double> f = results.modes().stream().map(m -> m.view().mode().frequency()).toList();
     assertThat(f).hasSize(4);
