@@ -60,12 +60,37 @@ final class Console {
     if (!terminal || quiet) {
       return Progress.SILENT;
     }
+    Clock clock = new Clock();
     return (what, done, of) -> {
-      String line = String.format(Locale.ROOT, "  %s %d/%d", what, done, of);
+      String line =
+          String.format(Locale.ROOT, "  %s %d/%d%s", what, done, of, clock.left(what, done, of));
       err.print("\r" + line + " ".repeat(Math.max(0, 60 - line.length())));
       err.flush();
       lineOpen = true;
     };
+  }
+
+  /** Time left of one piece of work, from the pace so far. */
+  private static final class Clock {
+    private static final double SOON = 2;
+    private String work = "";
+    private long start;
+
+    /** In words, or nothing while it cannot be known or is short. */
+    String left(String what, int done, int of) {
+      if (!what.equals(work)) {
+        work = what;
+        start = System.nanoTime();
+      }
+      double seconds = (System.nanoTime() - start) / 1e9;
+      double left = done > 0 ? seconds / done * (of - done) : 0;
+      if (left < SOON) {
+        return "";
+      }
+      return left < 100
+          ? String.format(Locale.ROOT, ", %.0f s left", left)
+          : String.format(Locale.ROOT, ", %.0f min left", left / 60);
+    }
   }
 
   private void endLine() {

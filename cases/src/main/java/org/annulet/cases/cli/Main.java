@@ -27,7 +27,13 @@ import picocli.CommandLine.UnmatchedArgumentException;
       "2 the input is at fault; 3 out of memory, disk or permission.",
       "A computed growth rate does not clear an engine to run."
     },
-    subcommands = {CheckVerb.class, MeshVerb.class, ModesVerb.class, VerifyVerb.class})
+    subcommands = {
+      CheckVerb.class,
+      MeshVerb.class,
+      ModesVerb.class,
+      DampersVerb.class,
+      VerifyVerb.class
+    })
 public final class Main implements Runnable {
   @Spec private CommandSpec spec;
 

@@ -16,7 +16,8 @@ import org.annulet.cases.read.Geometry;
  *
  * <p>A pattern holds for each position the number of its design, counted from 1, or 0. A symmetry
  * is a turn by whole burners, with or without a mirror image, that leaves the chamber (staging and
- * dampers it has already included) and the set of positions as they are.
+ * dampers it has already included) as it is. It need not keep the set of positions: two patterns
+ * are alike when it takes the dampers of one to those of the other.
  */
 final class DamperPatterns {
   private static final double SAME = 1e-7;
@@ -31,7 +32,7 @@ final class DamperPatterns {
     symmetries = symmetries(caseFile, (Geometry.Ring) caseFile.geometry(), search.positions());
   }
 
-  /** Permutations of the positions, the first one leaving all as it is. */
+  /** Where each symmetry takes each position; −1 where there is none. */
   List<int[]> symmetries() {
     return symmetries;
   }
@@ -82,15 +83,10 @@ final class DamperPatterns {
 
   /** Whether no image of the pattern comes before it. */
   private boolean first(int[] pattern) {
+    int[] image = new int[positions];
     for (int[] g : symmetries) {
-      for (int p = 0; p < positions; p++) {
-        int image = pattern[g[p]];
-        if (image != pattern[p]) {
-          if (image > pattern[p]) {
-            return false;
-          }
-          break;
-        }
+      if (moved(pattern, g, image) && Arrays.compare(image, pattern) > 0) {
+        return false;
       }
     }
     return true;
@@ -98,15 +94,28 @@ final class DamperPatterns {
 
   /** The image of a pattern that stands for its set. */
   int[] representative(int[] pattern) {
-    int[] best = pattern;
+    int[] best = pattern.clone();
+    int[] image = new int[positions];
     for (int[] g : symmetries) {
-      int[] image = new int[positions];
-      for (int p = 0; p < positions; p++) {
-        image[p] = pattern[g[p]];
+      if (moved(pattern, g, image) && Arrays.compare(image, best) > 0) {
+        best = image.clone();
       }
-      best = Arrays.compare(image, best) > 0 ? image : best;
     }
     return best;
+  }
+
+  /** Fills in the image; false when a damper would come where it cannot sit. */
+  private boolean moved(int[] pattern, int[] g, int[] image) {
+    Arrays.fill(image, 0);
+    for (int p = 0; p < positions; p++) {
+      if (pattern[p] > 0) {
+        if (g[p] < 0) {
+          return false;
+        }
+        image[g[p]] = pattern[p];
+      }
+    }
+    return true;
   }
 
   private static List<int[]> symmetries(
@@ -116,24 +125,12 @@ final class DamperPatterns {
     for (int mirror = 1; mirror >= -1; mirror -= 2) {
       for (int turn = 0; turn < n; turn++) {
         Motion g = new Motion(mirror, turn, n);
-        int[] image = image(g, positions);
-        if (image != null && g.keeps(caseFile)) {
-          found.add(image);
+        if (g.keeps(caseFile)) {
+          found.add(positions.stream().mapToInt(f -> index(positions, g.of(f))).toArray());
         }
       }
     }
     return found;
-  }
-
-  private static int[] image(Motion g, List<Damper.OnFace> places) {
-    int[] image = new int[places.size()];
-    for (int p = 0; p < image.length; p++) {
-      image[p] = index(places, g.of(places.get(p)));
-      if (image[p] < 0) {
-        return null;
-      }
-    }
-    return image;
   }
 
   private static int index(List<? extends Damper.Place> places, Damper.OnFace wanted) {

@@ -15,9 +15,12 @@ import org.annulet.solver.eigen.ModeSearch;
 import org.annulet.solver.eigen.SearchSettings;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.modes.ModeSet;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
+import tools.jackson.databind.JsonNode;
+import tools.jackson.databind.ObjectMapper;
 
 /** The search for places against solving every pattern in full. */
 class DamperStudyTest {
@@ -108,7 +111,91 @@ class DamperStudyTest {
       assertThat(r.worst()).isCloseTo(ranked.get(Arrays.toString(r.pattern())), within(1e-4));
     }
     assertThat(answer.certified()).isTrue();
+    assertThat(DamperFiles.terminal(new DamperStudy.Result(answer))).contains("argument principle");
+    if (staging.isEmpty()) {
+      twoOppositeDampersLeaveAMemberOfOrderOne(answer);
+      filesSayTheSame(answer);
+    }
     assertThat(answer.check().worst()).isCloseTo(best, within(1e-6));
     assertThat(answer.check().difference()).isLessThan(1e-3);
+  }
+
+  /** The splitting rule: 2 divides 2m, so one member has its nodes at both. */
+  private static void twoOppositeDampersLeaveAMemberOfOrderOne(DamperStudy.Answer answer) {
+    assertThat(answer.outcome().even().pattern()).containsExactly(1, 0, 0, 1, 0, 0);
+    DamperStudy.Fate pair =
+        answer.fates().stream().filter(f -> f.order() == 1).findFirst().orElseThrow();
+    assertThat(pair.factorEven()).isCloseTo(1, within(1e-12));
+    assertThat(pair.even())
+        .hasSize(2)
+        .anySatisfy(s -> assertThat(s.subtract(pair.s()).abs()).isLessThan(1e-5))
+        .anySatisfy(s -> assertThat(s.subtract(pair.s()).abs()).isGreaterThan(5));
+    assertThat(pair.factorBest()).isLessThan(0.51);
+  }
+
+  private void filesSayTheSame(DamperStudy.Answer answer) throws Exception {
+    DamperFiles.write(folder.resolve("out"), new DamperStudy.Result(answer), "test");
+    JsonNode json =
+        new ObjectMapper().readTree(Files.readString(folder.resolve("out/dampers.json")));
+    assertThat(json.path("certified").asBoolean()).isTrue();
+    assertThat(json.path("worst_growth_rate_per_s").asDouble())
+        .isEqualTo(answer.outcome().best().get(0).worst());
+    assertThat(json.path("modes").size()).isEqualTo(answer.check().modes().size());
+    List<String> table = Files.readAllLines(folder.resolve("out/dampers.csv"));
+    assertThat(table).hasSize(3);
+    assertThat(table.get(1)).startsWith("1,low,chamber.outer_face,180.00,0.000,1,");
+    String page = Files.readString(folder.resolve("out/dampers.html"));
+    assertThat(page).contains("confirmed on the full operator").doesNotContain("<script");
+    assertThat(Files.readString(folder.resolve("out/dampers.svg"))).startsWith("<svg");
+  }
+
+  /** 14 places, 4 alike dampers: 1001 ways, turned and mirrored ones once. */
+  @Test
+  void distinctPatterns_areBracelets() throws Exception {
+    String text =
+        String.format(RING, "")
+            .replace("burner_count: 6", "burner_count: 14")
+            .replace("bore: 60 mm", "bore: 40 mm")
+            .replace("count: 2", "count: 4")
+            .replace("mouth_width: 110 mm", "mouth_width: 40 mm");
+    CaseFile caseFile = read(text);
+    DamperPatterns patterns =
+        new DamperPatterns(caseFile, caseFile.studies().dampers().orElseThrow());
+    int[] number = new int[1];
+    patterns.forEachDistinct(p -> number[0]++);
+    assertThat(patterns.all().intValue()).isEqualTo(1001);
+    assertThat(number[0]).isEqualTo(bracelets(14, 4));
+    // Taken places spoil the symmetry of the places, not that of the ring: patterns that turn into
+    // each other are still one.
+    CaseFile taken = read(text.replace("burners: all", "burners: all, taken: [1]"));
+    DamperPatterns fewer = new DamperPatterns(taken, taken.studies().dampers().orElseThrow());
+    int[] left = new int[1];
+    fewer.forEachDistinct(p -> left[0]++);
+    assertThat(fewer.all().intValue()).isEqualTo(715);
+    assertThat(left[0]).isEqualTo(number[0]); // ten free places: each can be turned out of the way
+  }
+
+  /** Orbits of sets of k among n places on a circle, by brute force over bit patterns. */
+  private static int bracelets(int n, int k) {
+    int count = 0;
+    for (int set = 0; set < 1 << n; set++) {
+      if (Integer.bitCount(set) != k) {
+        continue;
+      }
+      boolean least = true;
+      for (int turn = 0; turn < n; turn++) {
+        int turned = 0;
+        int mirrored = 0;
+        for (int b = 0; b < n; b++) {
+          if ((set >> b & 1) == 1) {
+            turned |= 1 << (b + turn) % n;
+            mirrored |= 1 << (2 * n - b + turn) % n;
+          }
+        }
+        least &= set <= turned && set <= mirrored;
+      }
+      count += least ? 1 : 0;
+    }
+    return count;
   }
 }

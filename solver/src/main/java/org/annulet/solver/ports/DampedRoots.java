@@ -16,7 +16,11 @@ public final class DampedRoots {
   /** A step below this share of |s| ends the iteration of a root. */
   private static final double SETTLED = 1e-11;
 
+  /** Step aside from a pole of H, relative; its square is what it costs. */
+  private static final double ASIDE = 1e-7;
+
   private static final int STEPS = 80;
+  private static final int ROUNDS = 4;
   private static final double[] GAUSS = {
     -0.9602898564975363, -0.7966664774136267, -0.5255324099163290, -0.1834346424956498,
     0.1834346424956498, 0.5255324099163290, 0.7966664774136267, 0.9602898564975363
@@ -94,15 +98,15 @@ public final class DampedRoots {
   public Found all() {
     List<Complex> points = startPoints();
     int missing = 0;
-    for (int round = 0; round < 4; round++) {
+    for (int round = 0; round < ROUNDS; round++) {
       List<Complex> settled = iterate(points, STEPS);
       missing = missing(settled);
       points = settled;
-      if (missing <= 0) {
+      if (missing <= 0 || round == ROUNDS - 1) {
         break;
       }
       for (int k = 0; k < 2 * missing + 2; k++) {
-        points.add(somewhere(7 * round + k));
+        points.add(somewhere(101 * round + k));
       }
     }
     return new Found(inside(points), missing);
@@ -217,10 +221,15 @@ public final class DampedRoots {
           continue;
         }
         moving = true;
-        rate(zr[k], zi[k], rate);
+        double size = Math.hypot(zr[k], zi[k]);
+        // On a mode the dampers do not see g is 0/0: the step is taken from a place beside it.
+        double aside = onPole(zr[k], zi[k], size) ? ASIDE * size : 0;
+        double fromR = zr[k] + 0.6 * aside;
+        double fromI = zi[k] + 0.8 * aside;
+        rate(fromR, fromI, rate);
         for (int j = 0; j < n; j++) {
           if (j != k && !lost[j]) {
-            subtractPole(rate, zr[k] - zr[j], zi[k] - zi[j]);
+            subtractPole(rate, fromR - zr[j], fromI - zi[j]);
           }
         }
         double norm = rate[0] * rate[0] + rate[1] * rate[1];
@@ -231,12 +240,13 @@ public final class DampedRoots {
           lost[k] = !settled[k];
           continue;
         }
-        double size = Math.hypot(zr[k], zi[k]);
-        double length = Math.hypot(dr, di);
-        double cut = Math.min(1, 0.1 * size / length);
-        zr[k] -= cut * dr;
-        zi[k] -= cut * di;
-        settled[k] = length < SETTLED * size;
+        double cut = Math.min(1, 0.1 * size / Math.hypot(dr, di));
+        fromR -= cut * dr;
+        fromI -= cut * di;
+        double length = Math.hypot(fromR - zr[k], fromI - zi[k]);
+        zr[k] = fromR;
+        zi[k] = fromI;
+        settled[k] = length < (aside > 0 ? 10 : 1) * SETTLED * size;
         lost[k] = far(zr[k], zi[k]);
       }
       if (!moving) {
@@ -248,6 +258,15 @@ public final class DampedRoots {
       out.add(lost[k] ? Complex.NaN : new Complex(zr[k], zi[k]));
     }
     return out;
+  }
+
+  private boolean onPole(double re, double im, double size) {
+    for (PortPole pole : transfer.poles()) {
+      if (Math.hypot(re - pole.s().getReal(), im - pole.s().getImaginary()) < 0.1 * ASIDE * size) {
+        return true;
+      }
+    }
+    return false;
   }
 
   private boolean far(double re, double im) {
