@@ -40,7 +40,7 @@ final class ModesVerb extends Verb {
   }
 
   private ModesStudy.Answer one(CaseFile caseFile, Path folder) throws IOException {
-    ModesStudy.Answer answer = new ModesStudy(caseFile, console().progress()).run(Version.text());
+    ModesStudy.Answer answer = new ModesStudy(caseFile, console().progress()).run(Version.number());
     ModesFiles.write(folder, answer);
     console().result(TextTables.terminal(answer.results()));
     console().result("Written to " + folder);

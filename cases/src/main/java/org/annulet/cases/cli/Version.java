@@ -15,12 +15,17 @@ final class Version implements IVersionProvider {
 
   /** One line: name, version, commit. */
   static String text() {
+    return "annulet " + number();
+  }
+
+  /** Version and commit. */
+  static String number() {
     Properties p = new Properties();
     try (InputStream in = Version.class.getResourceAsStream("version.properties")) {
       p.load(in);
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }
-    return "annulet " + p.getProperty("version") + " (commit " + p.getProperty("commit") + ")";
+    return p.getProperty("version") + " (commit " + p.getProperty("commit") + ")";
   }
 }

@@ -72,9 +72,10 @@ final class DamperPlaces {
         .append(" Area spread over the places that are alike; of a pair the mean, since one damper")
         .append(" alone acts on one member with twice that and leaves the other as it is.")
         .append("</figcaption></figure>\n<div class=\"scroll\" tabindex=\"0\" role=\"region\"")
-        .append(" aria-label=\"Best place for each mode\"><table><thead><tr><th>mode</th>")
-        .append("<th>best place</th><th class=\"num\">there</th>")
-        .append("<th class=\"num\">at the common place [1/s per cm²]</th></tr></thead><tbody>\n");
+        .append(
+            " aria-label=\"Best place for each mode\"><table class=\"modes places\"><thead><tr><th>mode</th>")
+        .append("<th>best place</th><th class=\"num\">there [1/s per cm²]</th>")
+        .append("<th class=\"num\">at the common place</th></tr></thead><tbody>\n");
     List<ModeMaps> seen = new ArrayList<>();
     for (ModeEntry e : wanted) {
       ModeMaps maps = e.maps().orElseThrow();
@@ -90,11 +91,11 @@ final class DamperPlaces {
           .append(number)
           .append("</a>, ")
           .append(String.format(Locale.ROOT, "%.0f Hz", e.view().mode().frequency()))
-          .append("</td><td>")
+          .append("</td><td data-name=\"best place\">")
           .append(escape(Place.words(input.chamber(), own, maps.damper())))
-          .append("</td><td class=\"num\">")
+          .append("</td><td class=\"num\" data-name=\"there [1/s per cm²]\">")
           .append(value(maps.damper()[own]))
-          .append("</td><td class=\"num\">")
+          .append("</td><td class=\"num\" data-name=\"at the common place\">")
           .append(value(maps.damper()[best]))
           .append("</td></tr>\n");
     }

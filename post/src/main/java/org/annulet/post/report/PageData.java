@@ -58,7 +58,7 @@ final class PageData {
     if (!targets.isEmpty()) {
       json.object("worst");
       map(json, ModeMaps.worst(targets), nodes(flat, thin.points()));
-      json.truth("walls", walls).endObject();
+      json.text("how", walls ? "walls" : "gas").endObject();
     }
     return json.endObject().toString();
   }
@@ -110,14 +110,14 @@ final class PageData {
           .text("low", "−" + end)
           .text("high", "+" + end + " 1/s per cm² of damper; blue-green damps");
       map(json, e.maps().get().damper(), thin[1]);
-      json.truth("walls", walls).endObject();
+      json.text("how", walls ? "walls" : "gas").endObject();
       if (largest(e.maps().get().drive()) > 0) {
         json.object()
             .text("name", "where the flame drives")
             .text("low", "damps")
             .text("high", "drives; share of the growth rate per volume");
         map(json, e.maps().get().drive(), thin[1]);
-        json.truth("walls", false).endObject();
+        json.text("how", "spots").endObject();
       }
     }
     json.endArray().endObject();

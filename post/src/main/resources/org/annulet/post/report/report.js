@@ -102,8 +102,9 @@
       return true;
     }
 
-    // Colours between -1 and 1 over the gas, or along the walls only.
-    paint(v, alongWalls) {
+    // Colours between -1 and 1 over the gas, along the walls only, or as spots where a thin flame is.
+    paint(v, how) {
+      const alongWalls = how === "walls";
       palette ??= colours();
       const { corner, one, two, inside } = this.map;
       for (let q = 0; q < inside.length; q++) {
@@ -134,6 +135,15 @@
         }
         g.lineCap = "butt";
       }
+      if (how === "spots") {
+        for (let i = 0; i < count; i++) {
+          if (Math.abs(v[i]) < 0.03) continue;
+          g.fillStyle = css(shade(v[i]));
+          g.beginPath();
+          g.arc(points[2 * i], points[2 * i + 1], 4, 0, 2 * Math.PI);
+          g.fill();
+        }
+      }
       g.setTransform(1, 0, 0, 1, 0, 0);
     }
   }
@@ -146,7 +156,7 @@
     }
 
     draw() {
-      if (this.size()) this.paint(mapOf(data.worst), data.worst.walls);
+      if (this.size()) this.paint(mapOf(data.worst), data.worst.how);
     }
 
     toggle() {}
@@ -209,13 +219,13 @@
     draw() {
       if (!this.size()) return;
       if (this.still) {
-        this.paint(mapOf(this.still), this.still.walls);
+        this.paint(mapOf(this.still), this.still.how);
         return;
       }
       const phase = ((Number(this.slider.value) % 360) * Math.PI) / 180;
       const [c, s] = [Math.cos(phase), Math.sin(phase)];
       for (let i = 0; i < count; i++) this.value[i] = c * this.re[i] - s * this.im[i];
-      this.paint(this.value, false);
+      this.paint(this.value, "gas");
       this.output.textContent = Math.round(Number(this.slider.value)) + "°";
     }
 
