@@ -10,9 +10,12 @@ import java.util.Optional;
 import java.util.TreeSet;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.CaseSource;
+import org.annulet.cases.read.Flame;
 import org.annulet.cases.read.Geometry;
 import org.annulet.post.meaning.ParameterSensitivity;
+import org.annulet.solver.derivative.ChangeOfTerm;
 import org.annulet.solver.derivative.DifferenceOfOperators;
+import org.annulet.solver.derivative.OperatorChange;
 import org.annulet.solver.derivative.Slope;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.operator.AcousticOperator;
@@ -55,12 +58,18 @@ final class Sensitivities {
   Map<Mode, List<ParameterSensitivity>> run() {
     List<Optional<List<Effect>>> all =
         InputChange.candidates(caseFile).parallelStream().map(this::effects).toList();
+    List<Effect> later =
+        caseFile.flames().stream()
+            .filter(f -> f.response() instanceof Flame.Measured)
+            .flatMap(f -> later(f).stream())
+            .toList();
     Map<Mode, List<ParameterSensitivity>> tables = new IdentityHashMap<>();
     groups.forEach(g -> g.members().forEach(m -> tables.put(m, new ArrayList<>())));
     all.stream()
         .flatMap(Optional::stream)
         .flatMap(Collection::stream)
         .forEach(e -> tables.get(e.mode).add(e.row));
+    later.forEach(e -> tables.get(e.mode).add(e.row));
     Comparator<ParameterSensitivity> strongest =
         Comparator.comparingDouble((ParameterSensitivity p) -> -Math.abs(p.growthPerPercent()));
     tables.values().forEach(t -> t.sort(strongest));
@@ -99,6 +108,38 @@ final class Sensitivities {
       }
     }
     return Optional.of(effects);
+  }
+
+  /**
+   * What a measured response does that comes later by one percent of the mode's cycle: exact, since
+   * e^{−sδ} multiplies whatever the response is.
+   */
+  private List<Effect> later(Flame flame) {
+    List<Effect> effects = new ArrayList<>();
+    String name = "flame " + flame.name();
+    for (DerivedModes g : groups) {
+      List<ChangeOfTerm> terms =
+          g.derivative().prepared().operator().lowRankTerms().stream()
+              .filter(t -> t.name().equals(name) || t.name().startsWith(name + " burner "))
+              .map(ChangeOfTerm::delay)
+              .toList();
+      List<Slope> slopes = g.derivative().slopes(OperatorChange.together(terms));
+      for (int j = 0; j < slopes.size(); j++) {
+        Mode mode = g.members().get(j);
+        double cycle = 1 / mode.frequency();
+        Slope s = slopes.get(j);
+        effects.add(
+            new Effect(
+                mode,
+                new ParameterSensitivity(
+                    "flames." + flame.name() + ".response",
+                    "later by 1 % of a cycle",
+                    0.01 * cycle * s.first().getReal(),
+                    0.01 * cycle * s.first().getImaginary() / (2 * Math.PI),
+                    100 * s.linearRange() / cycle)));
+      }
+    }
+    return effects;
   }
 
   /** A changed case on the mesh at hand, drawn out where the dimensions of a ring differ. */

@@ -216,6 +216,37 @@ class SensitivitiesTest {
     assertThat(sum).isCloseTo(expected, within(0.02 * Math.abs(expected)));
   }
 
+  /**
+   * A table that holds 0.9 e^{−sτ} over frequency: later by one percent of a cycle is a delay
+   * longer by 1/(100 f), whose effect the n–τ flame's row tells. 3 %: the fit of the table, and the
+   * modes are not quite the same.
+   */
+  @Test
+  void measuredResponse_movesWithItsDelay(@TempDir Path folder) throws IOException {
+    StringBuilder table = new StringBuilder("frequency [Hz],gain [1],phase [°]\n");
+    for (int k = 1; k <= 40; k++) {
+      table.append(10 * k).append(",0.9,").append(-360 * 10 * k * 3e-3).append('\n');
+    }
+    Files.writeString(folder.resolve("flame.csv"), table);
+    Files.writeString(
+        folder.resolve("case.yaml"),
+        CASE.replace(
+            "{gain: 0.9, delay: 3 ms}", "{table: flame.csv, low_frequency_limit: as_measured}"));
+    Results measured = run(CaseReader.read(folder).caseFile().orElseThrow());
+    ModeEntry e = results.modes().get(0);
+    ParameterSensitivity known = row(e, "flames.main.response.delay");
+    double f = e.view().mode().frequency();
+    double share = 1 / (f * 3e-3); // one percent of a cycle in percent of the delay
+    ParameterSensitivity got = row(measured.modes().get(0), "flames.main.response");
+    double bound =
+        0.03 * share * Math.hypot(known.growthPerPercent(), 6.28 * known.frequencyPerPercent());
+    assertThat(got.growthPerPercent()).isCloseTo(share * known.growthPerPercent(), within(bound));
+    assertThat(got.frequencyPerPercent())
+        .isCloseTo(share * known.frequencyPerPercent(), within(bound / 6.28));
+    assertThat(got.linearRange())
+        .isCloseTo(known.linearRange() / share, within(0.1 * got.linearRange()));
+  }
+
   @Test
   void rows_areRankedAndWritten() {
     for (ModeEntry e : results.modes()) {
