@@ -144,13 +144,17 @@ final class Sensitivities {
 
   /** A changed case on the mesh at hand, drawn out where the dimensions of a ring differ. */
   private Optional<CaseProblem> problem(CaseFile changed) {
-    Optional<ChamberShape> shape = Optional.of(problem.shape());
-    if (caseFile.geometry() instanceof Geometry.Ring from
-        && changed.geometry() instanceof Geometry.Ring to
-        && !from.equals(to)) {
-      shape = RingMorph.of(problem.shape(), from, to);
+    try {
+      Optional<ChamberShape> shape = Optional.of(problem.shape());
+      if (caseFile.geometry() instanceof Geometry.Ring from
+          && changed.geometry() instanceof Geometry.Ring to
+          && !from.equals(to)) {
+        shape = RingMorph.of(problem.shape(), from, to);
+      }
+      return shape.map(s -> CaseProblem.on(changed, s));
+    } catch (IllegalArgumentException e) { // a value at the end of what is allowed
+      return Optional.empty();
     }
-    return shape.map(s -> CaseProblem.on(changed, s));
   }
 
   private void note(CaseSource.Value value) {

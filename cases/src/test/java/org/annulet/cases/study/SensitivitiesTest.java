@@ -247,6 +247,22 @@ class SensitivitiesTest {
         .isCloseTo(known.linearRange() / share, within(0.1 * got.linearRange()));
   }
 
+  /** An equivalence ratio of 1 is the richest allowed, so there is no larger one beside it. */
+  @Test
+  void valueAtTheEndOfItsRange_isLeftOutAndSaidToBe(@TempDir Path folder) throws IOException {
+    Path file = folder.resolve("case.yaml");
+    String profile = CASE.substring(CASE.indexOf("{temperature: {profile"), CASE.indexOf("walls:"));
+    Files.writeString(
+        file,
+        CASE.replace(
+            profile, "{temperature: 1700 K, mixture: {fuel: hydrogen, equivalence_ratio: 1}}\n"));
+    Results edge = run(CaseReader.read(file).caseFile().orElseThrow());
+    assertThat(edge.notes())
+        .anyMatch(n -> n.contains("leave out") && n.contains("equivalence_ratio"));
+    assertThat(row(edge.modes().get(0), "gas.zones.hot.temperature").growthPerPercent())
+        .isNotZero();
+  }
+
   @Test
   void rows_areRankedAndWritten() {
     for (ModeEntry e : results.modes()) {

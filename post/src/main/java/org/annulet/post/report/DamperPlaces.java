@@ -25,7 +25,10 @@ final class DamperPlaces {
 
   /** The modes a damper is wanted for: those that grow or may grow, else the least stable ones. */
   private static List<ModeEntry> wanted(Results results) {
-    List<ModeEntry> mapped = results.modes().stream().filter(e -> e.maps().isPresent()).toList();
+    List<ModeEntry> mapped =
+        results.modes().stream()
+            .filter(e -> e.maps().isPresent() && ModeMaps.best(e.maps().get().damper()) >= 0)
+            .toList();
     List<ModeEntry> grow = mapped.stream().filter(e -> e.stability() != Stability.DECAYS).toList();
     if (!grow.isEmpty()) {
       return grow;
