@@ -2,9 +2,12 @@ package org.annulet.cases.study;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
+import java.util.TreeSet;
 import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.read.Damper;
+import org.annulet.cases.read.Geometry;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.solver.assembly.DamperPlace;
 import org.annulet.solver.assembly.Face;
@@ -15,6 +18,9 @@ import org.annulet.solver.medium.Medium;
 
 /** The dampers of a case, one port for each place. */
 final class CaseDampers {
+  /** Distance from a burner's middle, over the pitch, that counts as none. */
+  private static final double CENTRED = 1e-9;
+
   private CaseDampers() {}
 
   /**
@@ -23,10 +29,12 @@ final class CaseDampers {
    * @throws CaseFaultException if one lies nowhere on its wall
    */
   static void put(CaseFile caseFile, Mesh mesh, Medium medium, ProblemBuilder builder) {
+    boolean cell = caseFile.geometry() instanceof Geometry.Ring && mesh.period() == 0;
     for (Damper damper : caseFile.dampers()) {
       int number = 0;
-      for (Damper.Place place : damper.places()) {
-        String name = damper.places().size() == 1 ? damper.name() : damper.name() + " " + ++number;
+      List<Damper.Place> places = cell ? List.of(inCell(damper)) : damper.places();
+      for (Damper.Place place : places) {
+        String name = places.size() == 1 ? damper.name() : damper.name() + " " + ++number;
         try {
           builder.damper(
               name,
@@ -44,6 +52,41 @@ final class CaseDampers {
         }
       }
     }
+  }
+
+  /**
+   * Whether every burner of a ring has the same dampers, centred on it, so that one burner cell
+   * serves for all.
+   */
+  static boolean allBurnersAlike(CaseFile caseFile) {
+    return caseFile.dampers().stream()
+        .allMatch(
+            d ->
+                caseFile.geometry() instanceof Geometry.Ring ring
+                    && atEveryBurner(d, ring.burnerCount()));
+  }
+
+  private static boolean atEveryBurner(Damper damper, int burners) {
+    Set<Long> cells = new TreeSet<>();
+    for (Damper.Place place : damper.places()) {
+      if (!(place instanceof Damper.OnFace f)) {
+        return false;
+      }
+      double cell = f.angle() * burners / (2 * Math.PI);
+      cells.add(Math.floorMod(Math.round(cell), (long) burners));
+      if (Math.abs(cell - Math.rint(cell)) > CENTRED || !inCell(damper).equals(moved(f))) {
+        return false;
+      }
+    }
+    return cells.size() == burners && damper.places().size() == burners;
+  }
+
+  private static Damper.OnFace inCell(Damper damper) {
+    return moved((Damper.OnFace) damper.places().get(0));
+  }
+
+  private static Damper.OnFace moved(Damper.OnFace f) {
+    return new Damper.OnFace(f.face(), f.x(), 0);
   }
 
   /** Width of the patch of wall a damper sees, in m. */

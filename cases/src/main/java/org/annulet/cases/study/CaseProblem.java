@@ -47,7 +47,7 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
     CaseFlames flames = new CaseFlames(caseFile);
     if (shape.cells().isPresent()
         && flames.allBurnersAlike()
-        && caseFile.dampers().isEmpty()
+        && CaseDampers.allBurnersAlike(caseFile)
         && caseFile.gas().even()) {
       RingCells cells = shape.cells().get();
       BlochAssembly bloch =
@@ -66,6 +66,12 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
               cells.count(),
               bloch.largestNumber()));
     }
+    return whole(caseFile, shape);
+  }
+
+  /** The same without use of a ring's symmetry. */
+  static CaseProblem whole(CaseFile caseFile, ChamberShape shape) {
+    Medium medium = new CaseGas(caseFile).on(shape.mesh());
     ProblemBuilder builder = builder(caseFile, shape.mesh(), shape, medium);
     if (shape.geometry() instanceof Section) {
       SectionAssembly section = builder.section();
@@ -78,16 +84,16 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
     }
     String method =
         shape.cells().isPresent()
-            ? whyWhole(caseFile, flames) + ": the whole ring is solved."
+            ? whyWhole(caseFile) + ": the whole ring is solved."
             : "The plane is solved as a whole.";
     return new CaseProblem(shape, medium, List.of(new Part("", null, 1, builder.build())), method);
   }
 
-  private static String whyWhole(CaseFile caseFile, CaseFlames flames) {
-    if (!flames.allBurnersAlike()) {
+  private static String whyWhole(CaseFile caseFile) {
+    if (!new CaseFlames(caseFile).allBurnersAlike()) {
       return "The burners differ";
     }
-    return caseFile.dampers().isEmpty()
+    return CaseDampers.allBurnersAlike(caseFile)
         ? "The temperature changes round the ring"
         : "Dampers break the symmetry";
   }

@@ -301,9 +301,9 @@ public final class DamperFiles {
               Words.hertz(f.s()),
               Words.growth(f.s().getReal()),
               f.order() < 0 ? "–" : Integer.toString(f.order()),
-              f.order() < 0 ? "–" : Words.fixed(f.factorBest(), 3),
+              factor(f.factorBest()),
               shown(f.best()),
-              f.order() < 0 || Double.isNaN(f.factorEven()) ? "–" : Words.fixed(f.factorEven(), 3),
+              factor(f.factorEven()),
               shown(f.even())));
     }
     page.table(
@@ -316,6 +316,10 @@ public final class DamperFiles {
             "factor, even",
             "even spacing: 1/s at Hz"),
         rows);
+  }
+
+  private static String factor(double value) {
+    return Double.isNaN(value) ? "–" : Words.fixed(value, 3);
   }
 
   private static String shown(Complex[] members) {

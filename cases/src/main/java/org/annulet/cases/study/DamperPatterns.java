@@ -152,6 +152,9 @@ final class DamperPatterns {
     }
 
     boolean keeps(CaseFile caseFile) {
+      if (!caseFile.gas().even()) {
+        return mirror == 1 && turn == 0;
+      }
       for (Flame flame : caseFile.flames()) {
         for (int b = 1; b <= burners; b++) {
           int image = 1 + Math.floorMod(mirror * (b - 1) + turn, burners);

@@ -65,7 +65,7 @@ final class DamperPorts {
     CaseProblem problem = CaseProblem.on(caseFile, shape);
     method = problem.method();
     complete = modes(problem, progress);
-    CaseProblem ports = CaseProblem.on(everywhere, shape);
+    CaseProblem ports = CaseProblem.whole(everywhere, shape);
     AcousticOperator full = ports.parts().get(0).assembled().operator();
     int candidates = search.candidates().size();
     int places = search.positions().size();

@@ -53,7 +53,8 @@ final class DamperRanking {
    * What was found.
    *
    * @param best patterns, the best first
-   * @param even the best pattern as evenly spaced as the positions allow
+   * @param even the best of those as evenly spaced as the positions allow; null where no row of
+   *     positions holds all dampers
    * @param all patterns there are, images included
    * @param distinct patterns looked at
    * @param dropped of them: early, on proof that they are worse
@@ -245,13 +246,14 @@ final class DamperRanking {
     return near;
   }
 
-  /** Patterns whose dampers lie as evenly round one row of positions as it allows. */
+  /** Patterns whose dampers lie as evenly round one row of positions as any row allows. */
   private List<int[]> even() {
     List<Damper.OnFace> places = ports.search().positions();
     int count = ports.search().count();
     int[] designs = interleaved();
     List<int[]> out = new ArrayList<>();
     Set<String> seen = new LinkedHashSet<>();
+    double least = Double.POSITIVE_INFINITY;
     List<Integer> done = new ArrayList<>();
     for (int p = 0; p < places.size(); p++) {
       Damper.OnFace one = places.get(p);
@@ -268,6 +270,7 @@ final class DamperRanking {
       Arrays.stream(row).forEach(done::add);
       for (int start = 0; start < row.length && row.length >= count; start++) {
         int[] pattern = new int[places.size()];
+        double uneven = 0;
         for (int k = 0; k < count; k++) {
           double wanted = places.get(row[start]).angle() + 2 * Math.PI * k / count;
           int nearest = -1;
@@ -279,6 +282,14 @@ final class DamperRanking {
             }
           }
           pattern[nearest] = designs[k];
+          uneven += Math.pow(turn(places.get(nearest), wanted), 2);
+        }
+        if (uneven > least + 1e-9) {
+          continue;
+        }
+        if (uneven < least - 1e-9) {
+          out.clear();
+          least = uneven;
         }
         int[] own = patterns.representative(pattern);
         if (seen.add(Arrays.toString(own))) {

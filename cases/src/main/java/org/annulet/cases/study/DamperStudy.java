@@ -40,8 +40,8 @@ public final class DamperStudy {
    *
    * @param s without dampers, in 1/s
    * @param order azimuthal order, or Bloch number; −1 where the chamber has none
-   * @param factorBest |Σ e^{2imθ}| over the best pattern's dampers, over their number; NaN without
-   *     order: 1 splits a pair most, 0 not at all to first order
+   * @param factorBest |Σ e^{2imθ}| over the best pattern's dampers, over their number; NaN where
+   *     there is no pair or no order: 1 splits a pair most, 0 not at all to first order
    * @param factorEven the same of the even pattern
    * @param best members with the best pattern, in 1/s; NaN where one was lost on its way
    * @param even members with the even pattern
@@ -172,7 +172,7 @@ public final class DamperStudy {
         new ArrayList<>(
             FullModes.of(
                 new PreparedOperator(
-                    CaseProblem.on(ports.with(pattern), ports.shape())
+                    CaseProblem.whole(ports.with(pattern), ports.shape())
                         .parts()
                         .get(0)
                         .assembled()
@@ -198,12 +198,13 @@ public final class DamperStudy {
         continue;
       }
       int order = order(ports.at(pole).part().name());
+      boolean pair = pole.multiplicity() == 2;
       fates.add(
           new Fate(
               pole.s(),
               order,
-              factor(ports, best, order),
-              even == null ? Double.NaN : factor(ports, even.pattern(), order),
+              pair ? factor(ports, best, order) : Double.NaN,
+              even == null || !pair ? Double.NaN : factor(ports, even.pattern(), order),
               after[i],
               afterEven[i]));
     }

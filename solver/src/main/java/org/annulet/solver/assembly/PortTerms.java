@@ -43,9 +43,12 @@ final class PortTerms {
 
   LowRankTerm of(PlacedDamper placed) {
     boolean onRing = assembler.metric().geometry() instanceof Ring;
-    if (onRing && assembler.mesh().period() == 0) {
+    boolean centred = placed.place() instanceof DamperPlace.OnFace f && f.angle() == 0;
+    if (onRing && assembler.mesh().period() == 0 && !centred) {
       throw new IllegalArgumentException(
-          "damper '" + placed.name() + "' breaks the symmetry of the cell; take the whole ring");
+          "damper '"
+              + placed.name()
+              + "' is not at the burner, where every cell can have one; take the whole ring");
     }
     double count = 1;
     Map<Integer, Double> mean;

@@ -94,7 +94,10 @@ public final class ProblemBuilder {
     return this;
   }
 
-  /** Adds a damper at a place. */
+  /**
+   * Adds a damper at a place; on the half cell of a ring, where it must be at angle 0 on a face,
+   * one at every burner.
+   */
   public ProblemBuilder damper(String name, Damper damper, DamperPlace place) {
     dampers.add(new PortTerms.PlacedDamper(name, damper, place));
     return this;

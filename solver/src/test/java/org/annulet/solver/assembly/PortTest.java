@@ -257,14 +257,39 @@ class PortTest {
         .twoPort("burners.outlet", new Side.InZone("1"), new FlowLoss(1.2, 50, 0.01));
   }
 
+  private static ProblemBuilder withDampers(Mesh mesh, int number) {
+    ProblemBuilder builder = new ProblemBuilder(mesh, SmallRings.geometry(4), SmallRings.gas(mesh));
+    Damper damper =
+        new ResonatorChain(2, 500, List.of(new ResonatorChain.Stage(5e-4, 0.03, 0.1, 8e-4)));
+    for (int k = 0; k < number; k++) {
+      builder.damper(
+          "d" + k, damper, new DamperPlace.OnFace("2", Face.OUTER, 0.4, 2 * Math.PI * k / 4, 0.05));
+    }
+    return builder;
+  }
+
+  @ParameterizedTest
+  @ValueSource(ints = {0, 1, 2})
+  void damperAtEveryBurner_onABlochCell_asOnTheRing(int q) {
+    RingCells cells = SmallRings.of(4);
+    AcousticOperator whole = withDampers(cells.whole(), 4).build().operator();
+    AcousticOperator cell = withDampers(cells.half(), 1).bloch(cells).number(q).operator();
+    NearRoot a = NearRoot.of(cell, 290 + 150 * q, -5);
+    NearRoot b = NearRoot.of(whole, a.frequency() + 1e-3, a.growth());
+    assertThat(b.s.subtract(a.s).abs()).isLessThan(1e-6 * a.s.abs());
+    AcousticOperator without = withDampers(cells.half(), 0).bloch(cells).number(q).operator();
+    NearRoot c = NearRoot.of(without, a.frequency(), 0);
+    assertThat(c.s.subtract(a.s).abs()).isGreaterThan(1e-4 * a.s.abs()); // the dampers matter
+  }
+
   @Test
-  void damperOnAHalfCell_isRefused() {
+  void damperBesideTheBurnerOfAHalfCell_isRefused() {
     RingCells cells = SmallRings.of(4);
     Damper damper =
         new ResonatorChain(2, 500, List.of(new ResonatorChain.Stage(1e-4, 0.02, 0.1, 1e-4)));
     BlochAssembly bloch =
         new ProblemBuilder(cells.half(), SmallRings.geometry(4), SmallRings.gas(cells.half()))
-            .damper("d", damper, new DamperPlace.OnFace("2", Face.OUTER, 0.4, 0, 0.01))
+            .damper("d", damper, new DamperPlace.OnFace("2", Face.OUTER, 0.4, 0.1, 0.01))
             .bloch(cells);
     assertThatThrownBy(() -> bloch.number(0)).hasMessageContaining("whole ring");
   }
