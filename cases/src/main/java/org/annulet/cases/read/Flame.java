@@ -2,6 +2,7 @@ package org.annulet.cases.read;
 
 import java.util.List;
 import java.util.OptionalDouble;
+import org.annulet.solver.flame.HeatDensity;
 
 /**
  * A flame: the same at every burner, with exceptions.
@@ -55,6 +56,15 @@ public record Flame(
    *     line, in m; +∞ for the burner's whole share of the ring, and on other kinds
    */
   public record Spread(String zone, double from, double to, double width) implements Place {}
+
+  /**
+   * Spread over a zone by a density.
+   *
+   * @param zone name of the zone
+   * @param width as in {@link Spread}
+   * @param density of the heat release, up to a factor
+   */
+  public record Brush(String zone, double width, HeatDensity density) implements Place {}
 
   /** Where the reference velocity is taken. */
   public sealed interface Reference {}

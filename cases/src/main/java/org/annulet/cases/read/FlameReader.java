@@ -93,6 +93,14 @@ final class FlameReader {
     if (way.isEmpty()) {
       return Optional.empty();
     }
+    if (way.get().equals("zone") && (m.has("brush") || m.has("heat_file"))) {
+      only(m, List.of("zone", "width", "brush", "heat_file"));
+      return stretch(m)
+          .flatMap(
+              s ->
+                  HeatDensityReader.read(m, geometry, s.zone)
+                      .map(d -> new Flame.Brush(s.zone, s.width, d)));
+    }
     if (way.get().equals("zone")) {
       only(m, List.of("zone", "from", "to", "distance", "width"));
       return stretch(m).map(s -> new Flame.Spread(s.zone, s.from, s.to, s.width));

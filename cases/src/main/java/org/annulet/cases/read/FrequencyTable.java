@@ -1,7 +1,9 @@
 package org.annulet.cases.read;
 
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.annulet.cases.units.QuantityKind;
@@ -69,16 +71,7 @@ public record FrequencyTable(String file, double[] frequency, double[] re, doubl
       return Optional.empty();
     }
     double[] hz = f.get();
-    for (int k = 0; k < hz.length; k++) {
-      if (hz[k] < 0 || k > 0 && hz[k] <= hz[k - 1]) {
-        entry.fault(
-            "frequencies must ascend from zero or above; row " + (k + 1) + " has " + hz[k] + " Hz",
-            "sort the table, and leave doubled rows out");
-        return Optional.empty();
-      }
-    }
-    if (hz.length < 3) {
-      entry.fault("the table has " + hz.length + " rows", "give at least 3");
+    if (!ascending(entry, hz)) {
       return Optional.empty();
     }
     double[] re = a.get();
@@ -89,5 +82,47 @@ public record FrequencyTable(String file, double[] frequency, double[] re, doubl
       im[k] = size0 * Math.sin(im[k]);
     }
     return Optional.of(new FrequencyTable(entry.text().orElse(""), hz, re, im));
+  }
+
+  /**
+   * Reads a matrix: columns {@code frequency} and {@code t11_real}, {@code t11_imaginary} to {@code
+   * t22_imaginary}.
+   */
+  static Optional<List<FrequencyTable>> matrix(Entry entry) {
+    List<String> names = List.of("t11", "t12", "t21", "t22");
+    Map<String, QuantityKind> columns = new LinkedHashMap<>();
+    columns.put("frequency", QuantityKind.FREQUENCY);
+    for (String n : names) {
+      columns.put(n + "_real", QuantityKind.FRACTION);
+      columns.put(n + "_imaginary", QuantityKind.FRACTION);
+    }
+    Optional<CsvTable> table = CsvTable.read(entry, columns);
+    List<FrequencyTable> matrix = new ArrayList<>();
+    for (String n : names) {
+      Optional<double[]> f = table.flatMap(t -> t.column("frequency"));
+      Optional<double[]> re = table.flatMap(t -> t.column(n + "_real"));
+      Optional<double[]> im = table.flatMap(t -> t.column(n + "_imaginary"));
+      if (f.isEmpty() || re.isEmpty() || im.isEmpty() || !ascending(entry, f.get())) {
+        return Optional.empty();
+      }
+      matrix.add(new FrequencyTable(entry.text().orElse(""), f.get(), re.get(), im.get()));
+    }
+    return Optional.of(matrix);
+  }
+
+  private static boolean ascending(Entry entry, double[] hz) {
+    for (int k = 0; k < hz.length; k++) {
+      if (hz[k] < 0 || k > 0 && hz[k] <= hz[k - 1]) {
+        entry.fault(
+            "frequencies must ascend from zero or above; row " + (k + 1) + " has " + hz[k] + " Hz",
+            "sort the table, and leave doubled rows out");
+        return false;
+      }
+    }
+    if (hz.length < 3) {
+      entry.fault("the table has " + hz.length + " rows", "give at least 3");
+      return false;
+    }
+    return true;
   }
 }

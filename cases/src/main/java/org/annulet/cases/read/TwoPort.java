@@ -1,5 +1,7 @@
 package org.annulet.cases.read;
 
+import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
@@ -13,6 +15,8 @@ import java.util.OptionalDouble;
  *     neither
  * @param velocity mean velocity the loss refers to in m/s; 0 without a loss
  * @param effectiveLength ℓ in m, not negative
+ * @param special a perforated plate or a measured matrix in place of loss and length; empty for
+ *     these
  */
 public record TwoPort(
     String edge,
@@ -20,4 +24,34 @@ public record TwoPort(
     OptionalDouble lossCoefficient,
     OptionalDouble pressureDrop,
     double velocity,
-    double effectiveLength) {}
+    double effectiveLength,
+    Optional<Special> special) {
+  /** Loss and length. */
+  public TwoPort(
+      String edge,
+      String flowFrom,
+      OptionalDouble lossCoefficient,
+      OptionalDouble pressureDrop,
+      double velocity,
+      double effectiveLength) {
+    this(
+        edge, flowFrom, lossCoefficient, pressureDrop, velocity, effectiveLength, Optional.empty());
+  }
+
+  /** What else may lie between two sides. */
+  public sealed interface Special {}
+
+  /**
+   * A perforated plate with flow.
+   *
+   * @param plate holes, pitch and flow; without a cavity
+   */
+  public record Screen(Wall.Perforated plate) implements Special {}
+
+  /**
+   * A transfer matrix over frequency: (p̂₂/ρc, û₂) = T (p̂₁/ρc, û₁), ρc of side 1.
+   *
+   * @param entries T₁₁, T₁₂, T₂₁, T₂₂
+   */
+  public record Transfer(List<FrequencyTable> entries) implements Special {}
+}

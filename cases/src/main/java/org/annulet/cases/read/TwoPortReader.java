@@ -37,6 +37,9 @@ final class TwoPortReader {
   }
 
   private Optional<TwoPort> port(String edge, Mapping m) {
+    if (m.has("perforated") || m.has("transfer_table")) {
+      return special(edge, m);
+    }
     OptionalDouble loss = optional(m, "loss_coefficient", QuantityKind.FRACTION);
     OptionalDouble drop = optional(m, "pressure_drop", QuantityKind.PRESSURE);
     double length = optional(m, "effective_length", QuantityKind.LENGTH).orElse(0);
@@ -64,6 +67,33 @@ final class TwoPortReader {
     }
     double speed = velocity;
     return upstream(edge, m).map(zone -> new TwoPort(edge, zone, loss, drop, speed, length));
+  }
+
+  private Optional<TwoPort> special(String edge, Mapping m) {
+    for (String key :
+        List.of("loss_coefficient", "pressure_drop", "velocity", "effective_length")) {
+      if (m.has(key)) {
+        m.at(key).fault("'" + key + "' beside a plate or a matrix, which hold all", "leave it out");
+      }
+    }
+    Optional<String> kind = m.exactlyOne(List.of("perforated", "transfer_table"));
+    Optional<TwoPort.Special> special = Optional.empty();
+    if (kind.equals(Optional.of("perforated"))) {
+      Wall.Perforated plate =
+          WallReader.perforated(Mapping.of(m.get("perforated").orElseThrow(), CaseKeys.SCREEN));
+      special = Optional.of(new TwoPort.Screen(plate));
+    } else if (kind.isPresent()) {
+      special =
+          FrequencyTable.matrix(m.get("transfer_table").orElseThrow()).map(TwoPort.Transfer::new);
+    }
+    Optional<String> from = upstream(edge, m);
+    Optional<TwoPort.Special> found = special;
+    return found.isEmpty()
+        ? Optional.empty()
+        : from.map(
+            zone ->
+                new TwoPort(
+                    edge, zone, OptionalDouble.empty(), OptionalDouble.empty(), 0, 0, found));
   }
 
   private static OptionalDouble optional(Mapping m, String key, QuantityKind kind) {

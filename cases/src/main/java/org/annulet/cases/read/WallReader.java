@@ -97,7 +97,8 @@ final class WallReader {
     return Optional.of(new Wall.Impedance(z[0], z[1]));
   }
 
-  private static Wall perforated(Mapping m) {
+  /** A perforated plate; the depth of its cavity is infinite where the keys know none. */
+  static Wall.Perforated perforated(Mapping m) {
     double bore = m.number("hole_bore", QuantityKind.LENGTH, Range.POSITIVE);
     double pitch = m.number("pitch", QuantityKind.LENGTH, Range.POSITIVE);
     if (pitch <= bore) {

@@ -315,6 +315,14 @@ final class CaseCheck {
               .mapToDouble(z -> z.soundSpeed().mean())
               .findFirst()
               .orElse(Double.POSITIVE_INFINITY);
+      if (port.special().isPresent()
+          && port.special().get() instanceof TwoPort.Transfer t
+          && CaseTwoPorts.measured(t).passivity(caseFile.window().highestFrequency()) < -0.01) {
+        caution(
+            "two_ports." + port.edge(),
+            "the fitted matrix feeds energy into the gas at some frequency of the window",
+            "check the table, and which side is side 1");
+      }
       double mach = port.velocity() / c;
       if (mach > LARGE_MACH) {
         caution(

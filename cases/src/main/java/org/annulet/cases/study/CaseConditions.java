@@ -81,6 +81,13 @@ final class CaseConditions {
 
   /** A two-port in words. */
   static String words(TwoPort port) {
+    if (port.special().isPresent()) {
+      return (port.special().get() instanceof TwoPort.Screen s
+              ? "perforated plate, flow of " + number(s.plate().biasVelocity()) + " m/s"
+              : "measured transfer matrix")
+          + ", flow from "
+          + port.flowFrom();
+    }
     List<String> parts = new ArrayList<>();
     String at = " at " + number(port.velocity()) + " m/s";
     port.lossCoefficient().ifPresent(z -> parts.add("ζ = " + number(z) + at));
@@ -150,6 +157,18 @@ final class CaseConditions {
           double w = mesh.area(t);
           x += w * cx;
           y += w * (mesh.cornerY(t, 0) + mesh.cornerY(t, 1) + mesh.cornerY(t, 2)) / 3;
+          weight += w;
+        }
+      }
+    }
+    if (flame.place() instanceof Flame.Brush brush) {
+      for (int t = 0; t < mesh.triangleCount(); t++) {
+        if (mesh.zoneNames().get(mesh.zone(t)).equals(brush.zone())) {
+          double cx = (mesh.cornerX(t, 0) + mesh.cornerX(t, 1) + mesh.cornerX(t, 2)) / 3;
+          double cy = (mesh.cornerY(t, 0) + mesh.cornerY(t, 1) + mesh.cornerY(t, 2)) / 3;
+          double w = mesh.area(t) * brush.density().at(cx, cy);
+          x += w * cx;
+          y += w * cy;
           weight += w;
         }
       }

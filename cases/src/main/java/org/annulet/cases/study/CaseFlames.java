@@ -95,6 +95,12 @@ final class CaseFlames {
           ? new Place.PointwiseSheet(sheet.edge())
           : new Place.Sheet(sheet.edge());
     }
+    if (place instanceof Flame.Brush brush) {
+      return new Place.Weighted(
+          new Patch(
+              brush.zone(), Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY, brush.width()),
+          brush.density());
+    }
     Flame.Spread spread = (Flame.Spread) place;
     return new Place.Spread(new Patch(spread.zone(), spread.from(), spread.to(), spread.width()));
   }

@@ -7,6 +7,9 @@ import org.annulet.cases.read.TwoPort;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.solver.assembly.ProblemBuilder;
 import org.annulet.solver.boundary.FlowLoss;
+import org.annulet.solver.boundary.MeasuredTwoPort;
+import org.annulet.solver.boundary.PerforatedLiner;
+import org.annulet.solver.boundary.PerforatedScreen;
 import org.annulet.solver.flame.Side;
 import org.annulet.solver.medium.Medium;
 
@@ -22,8 +25,7 @@ final class CaseTwoPorts {
   static void put(CaseFile caseFile, Mesh mesh, Medium medium, ProblemBuilder builder) {
     for (TwoPort port : caseFile.twoPorts()) {
       try {
-        builder.twoPort(
-            port.edge(), new Side.InZone(port.flowFrom()), loss(port, density(port, mesh, medium)));
+        builder.twoPort(port.edge(), new Side.InZone(port.flowFrom()), solved(port, mesh, medium));
       } catch (IllegalArgumentException e) {
         throw new CaseFaultException(
             List.of(
@@ -32,6 +34,26 @@ final class CaseTwoPorts {
                     .problem("two_ports." + port.edge(), e.getMessage(), "name an inner edge")));
       }
     }
+  }
+
+  private static org.annulet.solver.boundary.TwoPort solved(
+      TwoPort port, Mesh mesh, Medium medium) {
+    if (port.special().isEmpty()) {
+      return loss(port, density(port, mesh, medium));
+    }
+    if (port.special().get() instanceof TwoPort.Screen screen) {
+      return new PerforatedScreen(
+          new PerforatedLiner.Plate(
+              screen.plate().holeBore() / 2, screen.plate().pitch(), screen.plate().thickness()),
+          screen.plate().biasVelocity());
+    }
+    return measured((TwoPort.Transfer) port.special().get());
+  }
+
+  /** The fitted port of a measured matrix. */
+  static MeasuredTwoPort measured(TwoPort.Transfer transfer) {
+    return MeasuredTwoPort.ofTransferMatrix(
+        transfer.entries().stream().map(CaseWalls::table).toList(), CaseWalls.FIT);
   }
 
   private static FlowLoss loss(TwoPort port, double density) {

@@ -94,6 +94,9 @@ final class FlameTerms {
     if (place instanceof Place.Spread spread) {
       return functionals.heat(spread.patch(), burner);
     }
+    if (place instanceof Place.Weighted weighted) {
+      return functionals.heat(weighted, burner);
+    }
     Place.Sheet sheet = (Place.Sheet) place;
     return functionals.heat(ofBurner(sheet.edge(), burner));
   }
@@ -218,6 +221,30 @@ final class FlameTerms {
 
     SparseVector heat(Patch patch, int burner) {
       return over(patch, burner, this::expansion);
+    }
+
+    /** As the even spread, every point weighted by the density of the heat release there. */
+    SparseVector heat(Place.Weighted place, int burner) {
+      Map<Integer, Double> nodal = new TreeMap<>();
+      double[] total = new double[1];
+      Mesh mesh = mesh();
+      new PatchQuadrature(assembler.metric(), sectors)
+          .visit(
+              place.patch(),
+              burner,
+              (t, x, shape, weight) -> {
+                double y =
+                    shape[0] * mesh.cornerY(t, 0)
+                        + shape[1] * mesh.cornerY(t, 1)
+                        + shape[2] * mesh.cornerY(t, 2);
+                double w = weight * place.density().at(x, y);
+                total[0] += w;
+                for (int k = 0; k < 3; k++) {
+                  nodal.merge(
+                      assembler.nodes().corner(t, k), w * expansion(t) * shape[k], Double::sum);
+                }
+              });
+      return normalised(nodal, total[0], place.patch());
     }
 
     SparseVector mean(Patch patch, int burner) {

@@ -24,4 +24,12 @@ public sealed interface Place {
    * @param edge name of the inner edge
    */
   record PointwiseSheet(String edge) implements Place {}
+
+  /**
+   * Spread over a patch by a given density.
+   *
+   * @param patch of one zone
+   * @param density of the heat release, up to a factor
+   */
+  record Weighted(Patch patch, HeatDensity density) implements Place {}
 }

@@ -1,5 +1,7 @@
 package org.annulet.solver.medium;
 
+import java.util.List;
+
 /**
  * A temperature along the gas path: a polyline from upstream to downstream; each point takes the
  * value at the arc length of the nearest point of the path. For bent and reverse-flow chambers.
@@ -69,6 +71,37 @@ public final class PathProfile implements TemperatureField {
   @Override
   public double distanceOutside(double x, double y) {
     return axis.outside(nearestArc(x, y));
+  }
+
+  /**
+   * Distance along a path of the point of it nearest to a place.
+   *
+   * @param pathX x of the corners in m
+   * @param pathY y of the corners in m
+   * @param x of the place in m
+   * @param y of the place in m
+   * @return in m from the first corner
+   */
+  public static double distanceAlong(List<Double> pathX, List<Double> pathY, double x, double y) {
+    double best = Double.POSITIVE_INFINITY;
+    double before = 0;
+    double s = 0;
+    for (int k = 1; k < pathX.size(); k++) {
+      double x0 = pathX.get(k - 1);
+      double y0 = pathY.get(k - 1);
+      double dx = pathX.get(k) - x0;
+      double dy = pathY.get(k) - y0;
+      double length = Math.hypot(dx, dy);
+      double u = ((x - x0) * dx + (y - y0) * dy) / (length * length);
+      u = Math.max(0, Math.min(1, u));
+      double d = Math.hypot(x - x0 - u * dx, y - y0 - u * dy);
+      if (d < best) {
+        best = d;
+        s = before + u * length;
+      }
+      before += length;
+    }
+    return s;
   }
 
   private double nearestArc(double x, double y) {
