@@ -46,8 +46,9 @@ enum CaseKeys {
           + " transfer_table"),
   SCREEN("hole_bore! pitch! thickness! bias_velocity!"),
   DAMPER("resonator quarter_wave gas_of at! mouth_width"),
-  RESONATOR("neck_bore! necks neck_length! end_correction volume! resistance!"),
-  QUARTER_WAVE("bore! length! end_correction resistance!"),
+  RESONATOR(
+      "neck_bore! necks neck_length! end_correction volume! resistance! loss_coefficient bias_velocity"),
+  QUARTER_WAVE("bore! length! end_correction resistance! loss_coefficient bias_velocity"),
   DAMPER_PLACE("edge face x! y r count angles burners"),
   FLAME("heat_release! fuel_flow place! reference reference_velocity response! staging"),
   PLACE("sheet answer zone from to distance width brush heat_file"),

@@ -22,6 +22,21 @@ public record Damper(
   public sealed interface Design {
     /** Area of the mouth in m². */
     double mouthArea();
+
+    /** Resistance over ρc of the gas in it, without that of a flow through it. */
+    double resistance();
+
+    /** Loss coefficient times velocity of a flow through it, ζū in m/s. */
+    double lossVelocity();
+
+    /**
+     * All of its resistance over ρc: to Δp = ζρu²/2 with a mean velocity ū belongs ζū/c.
+     *
+     * @param soundSpeed c of the gas in it in m/s
+     */
+    default double resistance(double soundSpeed) {
+      return resistance() + lossVelocity() / soundSpeed;
+    }
   }
 
   /**
@@ -32,7 +47,9 @@ public record Damper(
    * @param neckLength as drawn, in m
    * @param addedLength end correction in radii of a neck
    * @param volume in m³
-   * @param resistance of the neck over ρc of the gas in it
+   * @param resistance of the neck over ρc of the gas in it, without that of a flow through it
+   * @param lossVelocity loss coefficient times velocity of the flow through the neck in m/s; 0
+   *     without
    */
   public record Resonator(
       double neckBore,
@@ -40,7 +57,8 @@ public record Damper(
       double neckLength,
       double addedLength,
       double volume,
-      double resistance)
+      double resistance,
+      double lossVelocity)
       implements Design {
     @Override
     public double mouthArea() {
@@ -59,9 +77,12 @@ public record Damper(
    * @param bore in m
    * @param length as drawn, in m
    * @param addedLength end correction in radii
-   * @param resistance at the mouth over ρc of the gas in it
+   * @param resistance at the mouth over ρc of the gas in it, without that of a flow through it
+   * @param lossVelocity loss coefficient times velocity of the flow through the mouth in m/s; 0
+   *     without
    */
-  public record QuarterWave(double bore, double length, double addedLength, double resistance)
+  public record QuarterWave(
+      double bore, double length, double addedLength, double resistance, double lossVelocity)
       implements Design {
     @Override
     public double mouthArea() {

@@ -67,7 +67,8 @@ final class DamperReader {
                   Range.NOT_NEGATIVE,
                   EndCorrection.FLANGED),
               r.number("volume", QuantityKind.VOLUME, Range.POSITIVE),
-              r.number("resistance", QuantityKind.FRACTION, Range.NOT_NEGATIVE)));
+              r.number("resistance", QuantityKind.FRACTION, Range.NOT_NEGATIVE),
+              lossVelocity(r)));
     }
     Mapping t = Mapping.of(value, CaseKeys.QUARTER_WAVE);
     double resistance = t.number("resistance", QuantityKind.FRACTION, Range.NOT_NEGATIVE);
@@ -82,7 +83,23 @@ final class DamperReader {
             t.number("bore", QuantityKind.LENGTH, Range.POSITIVE),
             t.number("length", QuantityKind.LENGTH, Range.POSITIVE),
             t.number("end_correction", QuantityKind.FRACTION, Range.NOT_NEGATIVE, 0),
-            resistance));
+            resistance,
+            lossVelocity(t)));
+  }
+
+  /** ζū of a bias flow: both of its keys, or none. */
+  private static double lossVelocity(Mapping m) {
+    if (m.has("loss_coefficient") != m.has("bias_velocity")) {
+      m.entry()
+          .fault(
+              "a bias flow needs 'loss_coefficient' and 'bias_velocity'",
+              "give both, as in 'loss_coefficient: 1.5, bias_velocity: 12 m/s', or neither");
+      return 0;
+    }
+    return m.has("bias_velocity")
+        ? m.number("loss_coefficient", QuantityKind.FRACTION, Range.NOT_NEGATIVE)
+            * m.number("bias_velocity", QuantityKind.SPEED, Range.NOT_NEGATIVE)
+        : 0;
   }
 
   private List<Damper.Place> places(Mapping m) {

@@ -108,13 +108,13 @@ final class CaseDampers {
           gas[1],
           List.of(
               new ResonatorChain.Stage(
-                  r.mouthArea(), r.effectiveLength(), r.resistance(), r.volume())));
+                  r.mouthArea(), r.effectiveLength(), r.resistance(gas[1]), r.volume())));
     }
     Damper.QuarterWave t = (Damper.QuarterWave) design;
     return new QuarterWaveTube(
         gas[0],
         gas[1],
-        new QuarterWaveTube.Mouth(t.mouthArea(), t.effectiveLength(), t.resistance()));
+        new QuarterWaveTube.Mouth(t.mouthArea(), t.effectiveLength(), t.resistance(gas[1])));
   }
 
   private static DamperPlace placed(Damper damper, Damper.Place place) {

@@ -88,13 +88,14 @@ final class DamperTuning {
       int own = c;
       Damper.Design given = candidates.get(c).design();
       double f = frequency(given, ports.soundSpeed(c));
+      double total = given.resistance(ports.soundSpeed(c));
       Optimum tuning = least(TUNING, 1, x -> with(own, tuned(given, x)));
-      Optimum loss = least(RESISTANCE, resistance(given), r -> with(own, resisting(given, r)));
+      Optimum loss = least(RESISTANCE, total, r -> with(own, resisting(given, r)));
       all.add(
           new OfDesign(
               candidates.get(c).name(),
               new Optimum(f, f * tuning.best, tuning.worst),
-              new Optimum(resistance(given), loss.best, loss.worst)));
+              new Optimum(total, loss.best, loss.worst)));
     }
     return all;
   }
@@ -153,12 +154,6 @@ final class DamperTuning {
     return soundSpeed / (4 * ((Damper.QuarterWave) design).effectiveLength());
   }
 
-  private static double resistance(Damper.Design design) {
-    return design instanceof Damper.Resonator r
-        ? r.resistance()
-        : ((Damper.QuarterWave) design).resistance();
-  }
-
   /** Tuned by its volume, or by its length. */
   static Damper.Design tuned(Damper.Design design, double factor) {
     if (design instanceof Damper.Resonator r) {
@@ -168,17 +163,19 @@ final class DamperTuning {
           r.neckLength(),
           r.addedLength(),
           r.volume() / (factor * factor),
-          r.resistance());
+          r.resistance(),
+          r.lossVelocity());
     }
     Damper.QuarterWave t = (Damper.QuarterWave) design;
     return new Damper.QuarterWave(
-        t.bore(), t.length() / factor, t.addedLength() / factor, t.resistance());
+        t.bore(), t.length() / factor, t.addedLength() / factor, t.resistance(), t.lossVelocity());
   }
 
+  /** With this resistance in all. */
   private static Damper.Design resisting(Damper.Design design, double resistance) {
     if (design instanceof Damper.Resonator r) {
       return new Damper.Resonator(
-          r.neckBore(), r.necks(), r.neckLength(), r.addedLength(), r.volume(), resistance);
+          r.neckBore(), r.necks(), r.neckLength(), r.addedLength(), r.volume(), resistance, 0);
     }
     Damper.QuarterWave t = (Damper.QuarterWave) design;
     // exactly 1 has no description
@@ -186,6 +183,7 @@ final class DamperTuning {
         t.bore(),
         t.length(),
         t.addedLength(),
-        Math.abs(resistance - 1) < 1e-6 ? 1 + 1e-6 : resistance);
+        Math.abs(resistance - 1) < 1e-6 ? 1 + 1e-6 : resistance,
+        0);
   }
 }

@@ -160,6 +160,13 @@ class BrokenCasesTest {
             18,
             "stands here twice",
             "leave one out"),
+        ring(
+            "walls:",
+            "dampers: {d: {quarter_wave: {bore: 20 mm, length: 200 mm, resistance: 0, bias_velocity: 9 m/s},"
+                + " at: {face: chamber.outer_face, x: 400 mm, angles: [0 °]}}}\nwalls:",
+            18,
+            "a bias flow needs 'loss_coefficient' and 'bias_velocity'",
+            "give both"),
         ring("walls:", "compare: {}\nwalls:", 18, "not supported in this version", "leave it out"),
         ring("walls:", "studies: {damper: {}}\nwalls:", 18, "unknown key 'damper'", "dampers"),
         ring(

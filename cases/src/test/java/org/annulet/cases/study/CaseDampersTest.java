@@ -8,6 +8,7 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import org.annulet.cases.read.CaseReader;
+import org.annulet.cases.read.Damper;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.Results;
@@ -119,5 +120,21 @@ class CaseDampersTest {
                   .map(GrowthBudget.Item::name))
           .contains("damper tuned");
     }
+  }
+
+  /** Δp = ζρu²/2 about a mean velocity ū: dp/du over ρc is ζū/c. */
+  @Test
+  void biasFlow_addsItsLossToTheResistance() {
+    Damper.QuarterWave tube = new Damper.QuarterWave(0.02, 0.2, 0, 0.1, 1.5 * 12);
+    double c = 500;
+    double rho = 3;
+    double step = 1e-3;
+    double slope =
+        (1.5 * rho * Math.pow(12 + step, 2) / 2 - 1.5 * rho * Math.pow(12 - step, 2) / 2)
+            / (2 * step);
+    assertThat(tube.resistance(c)).isCloseTo(0.1 + slope / (rho * c), within(1e-9));
+    Damper.QuarterWave still = new Damper.QuarterWave(0.02, 0.2, 0, tube.resistance(c), 0);
+    double[] gas = {rho, c};
+    assertThat(CaseDampers.solved(tube, gas)).isEqualTo(CaseDampers.solved(still, gas));
   }
 }

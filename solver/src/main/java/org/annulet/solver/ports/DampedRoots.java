@@ -227,6 +227,7 @@ public final class DampedRoots {
         double fromR = zr[k] + 0.6 * aside;
         double fromI = zi[k] + 0.8 * aside;
         rate(fromR, fromI, rate);
+        double plain = 1 / Math.hypot(rate[0], rate[1]); // Newton's own step: small at roots only
         for (int j = 0; j < n; j++) {
           if (j != k && !lost[j]) {
             subtractPole(rate, fromR - zr[j], fromI - zi[j]);
@@ -246,7 +247,7 @@ public final class DampedRoots {
         double length = Math.hypot(fromR - zr[k], fromI - zi[k]);
         zr[k] = fromR;
         zi[k] = fromI;
-        settled[k] = length < (aside > 0 ? 10 : 1) * SETTLED * size;
+        settled[k] = length < (aside > 0 ? 10 : 1) * SETTLED * size && plain < 10 * ASIDE * size;
         lost[k] = far(zr[k], zi[k]);
       }
       if (!moving) {
