@@ -76,7 +76,10 @@ public final class Summary {
   /** What one percent more of the strongest inputs does; empty where that was not computed. */
   private static String perPercent(ModeEntry e) {
     List<ParameterSensitivity> top =
-        e.sensitivities().stream().limit(NAMED).filter(p -> p.growthPerPercent() != 0).toList();
+        e.sensitivities().stream()
+            .filter(p -> p.growthPerPercent() != 0 && !isGasProperty(p.key()))
+            .limit(NAMED)
+            .toList();
     if (top.isEmpty()) {
       return "";
     }
@@ -90,6 +93,11 @@ public final class Summary {
           .append(k == 0 ? " 1/s" : "");
     }
     return b.append('.').toString();
+  }
+
+  /** γ and R follow from the mixture: nobody turns them alone, so they are no lever to name. */
+  private static boolean isGasProperty(String key) {
+    return key.endsWith(".gamma") || key.endsWith(".gas_constant");
   }
 
   private static String named(List<GrowthBudget.Item> items) {
