@@ -192,7 +192,8 @@ final class CaseCheck {
               text(
                   "the fit of the table misses it by up to %.2g %% of its largest gain",
                   100 * fit.fitError()),
-              "look at the drawn fit; smooth the table or leave outliers out");
+              "look at the drawn fit and leave outliers out; gain and phase that do not belong together"
+                  + " (an answer before its cause) cannot be fitted");
         }
       }
       flame
@@ -294,7 +295,8 @@ final class CaseCheck {
       caution(
           "walls." + name,
           text("the fit of the table misses it by up to %.2g in reflection", wall.fitError()),
-          "look at the drawn fit; smooth the table or leave outliers out");
+          "look at the drawn fit and leave outliers out; gain and phase that do not belong together"
+              + " (an answer before its cause) cannot be fitted");
     }
     if (!wall.passive()) {
       caution(

@@ -211,7 +211,8 @@ final class BoundaryNodes {
       ts[n] = t;
       sums[n] = sums[n - 1] + part;
       n++;
-      if (n > 64 * (long) rules.nodeCap()) {
+      // Eight strides a cut: stop well before their arrays fill the memory.
+      if (count + sums[n - 1] > rules.nodeCap() || n > 16 * (long) rules.nodeCap()) {
         throw rules.tooMany("along edge '" + outline.edges().get(e).name() + "'");
       }
     }
