@@ -77,20 +77,24 @@ final class DamperRanking {
   }
 
   Outcome run() {
-    List<int[]> evenOnes = even();
-    List<Ranked> spaced = evenOnes.parallelStream().map(this::judged).toList();
-    Ranked even = spaced.stream().min(order).orElse(null);
-    spaced.forEach(this::offer);
     BigInteger all = patterns.all();
-    boolean everyOne =
+    boolean feasible =
         all.compareTo(MOST) <= 0
             && all.longValueExact() / patterns.symmetries().size() <= MOST_DISTINCT;
-    if (everyOne) {
-      everyPattern();
-    } else {
-      exchange();
-    }
-    return new Outcome(List.copyOf(best), even, all, looked, dropped, unsure, everyOne);
+    return feasible ? outcome(true, this::everyPattern) : byExchange();
+  }
+
+  /** Without looking at every pattern. */
+  Outcome byExchange() {
+    return outcome(false, this::exchange);
+  }
+
+  private Outcome outcome(boolean everyOne, Runnable search) {
+    List<Ranked> spaced = even().parallelStream().map(this::judged).toList();
+    Ranked even = spaced.stream().min(order).orElse(null);
+    spaced.forEach(this::offer);
+    search.run();
+    return new Outcome(List.copyOf(best), even, patterns.all(), looked, dropped, unsure, everyOne);
   }
 
   private void everyPattern() {

@@ -149,6 +149,36 @@ class DamperStudyTest {
     assertThat(Files.readString(folder.resolve("out/dampers.svg"))).startsWith("<svg");
   }
 
+  /** Two designs on two rows of six places: 660 patterns; and the same whatever the threads. */
+  @Test
+  void exchangeSearch_findsTheBestOfAll_andBothRepeatThemselves() throws Exception {
+    String text =
+        String.format(RING, "")
+            .replace("x: 180 mm", "x: [170 mm, 300 mm]")
+            .replace(
+                "designs:\n",
+                "designs:\n      high: {count: 1, quarter_wave: {bore: 30 mm, length: 350 mm,"
+                    + " resistance: 0.05}, mouth_width: 110 mm}\n");
+    CaseFile caseFile = read(text);
+    DamperPorts ports =
+        new DamperPorts(caseFile, caseFile.studies().dampers().orElseThrow(), Progress.SILENT);
+    DamperRanking.Outcome every = new DamperRanking(ports, Progress.SILENT).run();
+    DamperRanking.Outcome exchanged = new DamperRanking(ports, Progress.SILENT).byExchange();
+    assertThat(every.everyOne()).isTrue();
+    assertThat(every.all().intValue()).isEqualTo(660); // 12 · (11 over 2)
+    assertThat(every.unsure()).isZero();
+    assertThat(exchanged.everyOne()).isFalse();
+    assertThat(exchanged.best().get(0).worst())
+        .isCloseTo(every.best().get(0).worst(), within(1e-6));
+    assertThat(every.even().worst()).isGreaterThanOrEqualTo(every.best().get(0).worst());
+    DamperRanking.Outcome again = new DamperRanking(ports, Progress.SILENT).run();
+    for (int k = 0; k < every.best().size(); k++) {
+      assertThat(again.best().get(k).pattern()).isEqualTo(every.best().get(k).pattern());
+      assertThat(again.best().get(k).worst()).isEqualTo(every.best().get(k).worst());
+    }
+    assertThat(again.dropped()).isEqualTo(every.dropped());
+  }
+
   /** 14 places, 4 alike dampers: 1001 ways, turned and mirrored ones once. */
   @Test
   void distinctPatterns_areBracelets() throws Exception {
