@@ -81,8 +81,12 @@ final class DamperPlacing {
   static String picture(DamperStudy.Answer answer, int[] pattern) {
     DamperSearch search = answer.search();
     Geometry.Ring ring = (Geometry.Ring) answer.ports().caseFile().geometry();
-    List<Double> circles =
-        search.positions().stream().map(Damper.OnFace::x).distinct().sorted().toList();
+    List<Damper.OnFace> circles =
+        search.positions().stream()
+            .map(f -> new Damper.OnFace(f.face(), f.x(), 0))
+            .distinct()
+            .sorted(Comparator.comparingDouble(Damper.OnFace::x).thenComparing(Damper.OnFace::face))
+            .toList();
     List<Row> rows = rows(answer, pattern);
     List<RingPlan.Place> places = new ArrayList<>();
     for (int p = 0; p < pattern.length; p++) {
@@ -103,7 +107,7 @@ final class DamperPlacing {
                   + Words.fixed(Math.toDegrees(positive(f.angle())), 2)
                   + "°",
               f.angle(),
-              circles.indexOf(f.x()),
+              circles.indexOf(new Damper.OnFace(f.face(), f.x(), 0)),
               pattern[p],
               label));
     }
