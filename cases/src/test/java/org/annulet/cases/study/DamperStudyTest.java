@@ -179,6 +179,27 @@ class DamperStudyTest {
     assertThat(again.dropped()).isEqualTo(every.dropped());
   }
 
+  /** A damper of the case takes its place and leaves one mirror plane; both stay in the answer. */
+  @Test
+  void dampersOfTheCase_takeTheirPlaces_andStay() throws Exception {
+    String text =
+        String.format(RING, "")
+            .replace(
+                "window:",
+                "dampers: {own: {resonator: {neck_bore: 20 mm, neck_length: 25 mm, volume: 900 cm3,"
+                    + " resistance: 0.1}, at: {face: chamber.outer_face, x: 180 mm, burners: [2]},"
+                    + " mouth_width: 110 mm}}\nwindow:");
+    CaseFile caseFile = read(text);
+    DamperStudy.Answer answer = new DamperStudy(caseFile, Progress.SILENT).run().answer();
+    assertThat(answer.search().positions()).hasSize(5);
+    assertThat(answer.outcome().distinct()).isEqualTo(6); // 10 pairs, 2 of them their own image
+    assertThat(answer.certified()).isTrue();
+    assertThat(answer.ports().with(answer.pattern()).dampers().stream().map(d -> d.name()))
+        .containsExactly("own", "low");
+    assertThat(answer.check().worst())
+        .isCloseTo(fullWorst(answer.ports(), answer.pattern()), within(1e-6));
+  }
+
   /** 14 places, 4 alike dampers: 1001 ways, turned and mirrored ones once. */
   @Test
   void distinctPatterns_areBracelets() throws Exception {
