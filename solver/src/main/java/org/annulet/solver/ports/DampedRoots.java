@@ -21,15 +21,6 @@ public final class DampedRoots {
 
   private static final int STEPS = 80;
   private static final int ROUNDS = 4;
-  private static final double[] GAUSS = {
-    -0.9602898564975363, -0.7966664774136267, -0.5255324099163290, -0.1834346424956498,
-    0.1834346424956498, 0.5255324099163290, 0.7966664774136267, 0.9602898564975363
-  };
-  private static final double[] GAUSS_WEIGHT = {
-    0.1012285362903763, 0.2223810344533745, 0.3137066458778873, 0.3626837833783620,
-    0.3626837833783620, 0.3137066458778873, 0.2223810344533745, 0.1012285362903763
-  };
-
   private final PortTransfer transfer;
   private final PortTransfer.Selection selection;
   private final AnalyticFunction[] flows;
@@ -230,7 +221,7 @@ public final class DampedRoots {
         double plain = 1 / Math.hypot(rate[0], rate[1]); // Newton's own step: small at roots only
         for (int j = 0; j < n; j++) {
           if (j != k && !lost[j]) {
-            subtractPole(rate, fromR - zr[j], fromI - zi[j]);
+            SideIntegral.subtractPole(rate, fromR - zr[j], fromI - zi[j]);
           }
         }
         double norm = rate[0] * rate[0] + rate[1] * rate[1];
@@ -292,14 +283,6 @@ public final class DampedRoots {
         .toList();
   }
 
-  private static void subtractPole(double[] rate, double dr, double di) {
-    double norm = dr * dr + di * di;
-    if (norm > 0) {
-      rate[0] -= dr / norm;
-      rate[1] += di / norm;
-    }
-  }
-
   /** g′/g. */
   private void rate(double sr, double si, double[] out) {
     selection.at(sr, si, h);
@@ -349,10 +332,14 @@ public final class DampedRoots {
     double before = Double.NaN;
     for (int panels = 2; panels <= 64; panels *= 2) {
       double now =
-          side(roots, new double[] {edge[0], edge[2], edge[1], edge[2]}, panels)
-              + side(roots, new double[] {edge[1], edge[2], edge[1], edge[3]}, 2 * panels)
-              + side(roots, new double[] {edge[1], edge[3], edge[0], edge[3]}, panels)
-              + side(roots, new double[] {edge[0], edge[3], edge[0], edge[2]}, 2 * panels);
+          SideIntegral.of(
+                  this::rate, roots, new double[] {edge[0], edge[2], edge[1], edge[2]}, panels)
+              + SideIntegral.of(
+                  this::rate, roots, new double[] {edge[1], edge[2], edge[1], edge[3]}, 2 * panels)
+              + SideIntegral.of(
+                  this::rate, roots, new double[] {edge[1], edge[3], edge[0], edge[3]}, panels)
+              + SideIntegral.of(
+                  this::rate, roots, new double[] {edge[0], edge[3], edge[0], edge[2]}, 2 * panels);
       double count = now / (2 * Math.PI);
       if (Math.abs(count - before) < 0.02 && Math.abs(count - Math.rint(count)) < 0.02) {
         int missing = (int) Math.rint(count);
@@ -393,26 +380,5 @@ public final class DampedRoots {
       }
     }
     return out;
-  }
-
-  /** Im ∫ (g′/g − Σ 1/(s − root)) ds along a straight side. */
-  private double side(List<Complex> roots, double[] ends, int panels) {
-    double dr = (ends[2] - ends[0]) / panels;
-    double di = (ends[3] - ends[1]) / panels;
-    double[] rate = new double[2];
-    double sum = 0;
-    for (int p = 0; p < panels; p++) {
-      for (int g = 0; g < GAUSS.length; g++) {
-        double t = p + 0.5 + 0.5 * GAUSS[g];
-        double sr = ends[0] + t * dr;
-        double si = ends[1] + t * di;
-        rate(sr, si, rate);
-        for (Complex root : roots) {
-          subtractPole(rate, sr - root.getReal(), si - root.getImaginary());
-        }
-        sum += 0.5 * GAUSS_WEIGHT[g] * (rate[0] * di + rate[1] * dr);
-      }
-    }
-    return sum;
   }
 }

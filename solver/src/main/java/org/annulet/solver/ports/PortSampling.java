@@ -23,7 +23,7 @@ public final class PortSampling {
   /** Polynomials are added until the check is met or the samples run out. */
   private static final double WANTED = 1e-6;
 
-  private static final double UNSEEN = 1e-8;
+  private static final double UNSEEN = 1e-10;
 
   private static final int[] DEGREES = {20, 32};
 
