@@ -79,7 +79,7 @@ final class Lanczos {
           } else {
             multiply(op, workd, ipntr[0] - 1, b);
           }
-          factor.solve(b);
+          factor.solveUnrefined(b);
           System.arraycopy(b, 0, workd, ipntr[1] - 1, n);
         } else if (ido.val == 2) {
           double[] b = new double[n];

@@ -1,39 +1,35 @@
 package org.annulet.solver.eigen;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import java.util.function.UnaryOperator;
 import org.annulet.solver.dense.ComplexMatrix;
 import org.annulet.solver.modes.ModeSet;
 import org.annulet.solver.modes.Window;
 import org.annulet.solver.operator.AcousticOperator;
-import org.annulet.solver.operator.AnalyticFunction;
-import org.annulet.solver.operator.LowRankTerm;
-import org.annulet.solver.operator.SparseTerm;
 import org.apache.commons.math3.complex.Complex;
 
 /**
  * All modes of an operator in a window, with the certificate that none is missing.
  *
- * <p>Search on a real reduced basis, polish on the full operator, count on the full operator along
- * a contour just outside the window; search on with more tiles and a larger basis while the numbers
- * differ. Never throws for want of convergence: what could not be settled is said in the verdicts,
- * in {@link ModeSet#complete()} and in the notes.
+ * <p>Search on a real reduced basis, polish on the full operator, count along a contour just
+ * outside the window ({@link Certifier} says on what); search on with more tiles and a larger basis
+ * while the numbers differ. Never throws for want of convergence: what could not be settled is said
+ * in the verdicts, in {@link ModeSet#complete()} and in the notes.
  */
 public final class ModeSearch {
+  /** Problems so small that nothing is gained by reducing. */
   private static final int WHOLE_SPACE = 60;
 
-  /** Passive modes are taken up to this multiple of the window's upper frequency. */
-  private static final double BEYOND = 1.5;
-
-  private static final int MOST_PASSIVE = 80;
+  /** Frequencies of the first basis: enough for starts, which the polishing then makes exact. */
+  private static final int FIRST_RESPONSES = 2;
 
   private final PreparedOperator prepared;
   private final Window window;
   private final Rectangle wanted;
   private final SearchSettings settings;
   private final Spoilers spoilers;
+  private final int fullCount;
   private final List<String> notes = new ArrayList<>();
 
   /** Ways to damage the search on purpose, so that tests can see the certificate fail. */
@@ -54,11 +50,21 @@ public final class ModeSearch {
   }
 
   ModeSearch(PreparedOperator prepared, Window window, SearchSettings settings, Spoilers spoilers) {
+    this(prepared, window, settings, spoilers, Certifier.SMALL);
+  }
+
+  ModeSearch(
+      PreparedOperator prepared,
+      Window window,
+      SearchSettings settings,
+      Spoilers spoilers,
+      int fullCount) {
     this.prepared = prepared;
     this.window = window;
     this.wanted = Rectangle.of(window);
     this.settings = settings;
     this.spoilers = spoilers;
+    this.fullCount = fullCount;
   }
 
   ModeSet run() {
@@ -68,26 +74,32 @@ public final class ModeSearch {
     Rectangle region = wanted.grown(1.4 * most * w, 1.4 * most * h, 0.4 * wanted.bottom());
     Rectangle reach = wanted.grown(1.2 * most * w, 1.2 * most * h, 0.45 * wanted.bottom());
     List<Complex> poles = CoefficientPoles.in(prepared, region.grown(w, h, region.bottom() / 2));
-    PassiveModes.Spectrum passive = passiveModes();
-    ReducedBasis basis = startBasis(passive);
+    SearchPlan plan = new SearchPlan(prepared, window, settings);
+    notes.addAll(plan.notes());
+    Certifier certifier = new Certifier(prepared, plan, settings, fullCount);
+    PassiveModes.Spectrum passive = plan.passive();
+    ReducedBasis basis =
+        prepared.size() <= WHOLE_SPACE
+            ? ReducedBasis.everything(prepared)
+            : plan.basis(region.top(), FIRST_RESPONSES);
     Rectangle contour = null;
     RootCount.Result count = null;
     ModeList modes = null;
     List<Polish.Polished> found = List.of();
     for (int round = 1; round <= settings.rounds(); round++) {
-      if (prepared.size() > WHOLE_SPACE) {
-        basis.addResponses(passive, shifts(passive, region.top(), 3 + 3 * round));
+      if (round > 1 && prepared.size() > WHOLE_SPACE) {
+        basis.addResponses(passive, plan.shifts(region.top(), 3 * round));
         found.forEach(p -> addVectors(p, basis));
       }
       double[][] q = spoilers.basis().apply(basis.columns());
       SmallSearch.Outcome outcome =
-          new SmallSearch(ProjectedOperator.onReal(prepared, q), region, poles, step(region))
-              .run(expected(passive, region), round);
+          new SmallSearch(ProjectedOperator.onReal(prepared, q), region, poles, plan.step(region))
+              .run(plan.expected(region), round);
       found = spoilers.modes().apply(polish(outcome, q, reach));
       List<Complex> known = roots(found, outcome, reach);
       if (count == null || !count.certain()) {
         contour = ContourChoice.around(wanted, avoid(known, poles, passive));
-        count = count(contour, known, poles);
+        count = certifier.count(contour, known, poles);
       }
       modes = ModeList.of(window, contour, found);
       if (count.certain()
@@ -96,22 +108,8 @@ public final class ModeSearch {
         break;
       }
     }
+    notes.addAll(certifier.notes());
     return answer(contour, count, poles, modes);
-  }
-
-  private ReducedBasis startBasis(PassiveModes.Spectrum passive) {
-    if (prepared.size() <= WHOLE_SPACE) {
-      return ReducedBasis.everything(prepared);
-    }
-    ReducedBasis basis = new ReducedBasis(prepared);
-    // Never empty, also where no passive mode is near and nothing responds: constant pressure.
-    double[] ones = new double[prepared.size()];
-    Arrays.fill(ones, 1);
-    basis.add(ones);
-    for (double[] v : passive.vectors()) {
-      basis.add(v);
-    }
-    return basis;
   }
 
   private static void addVectors(Polish.Polished p, ReducedBasis basis) {
@@ -119,14 +117,6 @@ public final class ModeSearch {
       basis.add(p.vectors().re()[j]);
       basis.add(p.vectors().im()[j]);
     }
-  }
-
-  private RootCount.Result count(Rectangle contour, List<Complex> known, List<Complex> poles) {
-    return RootCount.inside(
-        contour,
-        RootCount.determinant(prepared),
-        new RootCount.Known(known, poles),
-        new RootCount.Fineness(step(contour), settings.largestContour()));
   }
 
   /** Zeros, from zeros minus poles. */
@@ -179,83 +169,6 @@ public final class ModeSearch {
         expected,
         complete,
         List.copyOf(notes));
-  }
-
-  private PassiveModes.Spectrum passiveModes() {
-    double top = window.highestFrequency();
-    PassiveModes.ShiftInvert shifted = new PassiveModes.ShiftInvert(prepared);
-    double beyond = BEYOND;
-    double omega = 2 * Math.PI * top;
-    while (beyond > 1.1 && shifted.countBelow(beyond * beyond * omega * omega) > MOST_PASSIVE) {
-      beyond -= 0.1;
-    }
-    PassiveModes.Spectrum passive = PassiveModes.below(prepared, beyond * top);
-    if (!passive.complete()) {
-      notes.add(
-          "passive modes: inertia gives "
-              + passive.expected()
-              + " below "
-              + Math.round(beyond * top)
-              + " Hz, found "
-              + passive.omegaSquared().length);
-    }
-    return passive;
-  }
-
-  /** Angular frequencies for the responses: spread over 0 … top, each in a gap of the passive. */
-  private static double[] shifts(PassiveModes.Spectrum passive, double top, int number) {
-    double[] shifts = new double[number];
-    for (int k = 0; k < number; k++) {
-      double ideal = top * 0.5 * (1.04 - Math.cos(Math.PI * (k + 0.5) / number));
-      double best = ideal;
-      double bestGap = -1;
-      for (int t = -4; t <= 4; t++) {
-        double trial = ideal + t * 0.1 * top / number;
-        double gap = Double.POSITIVE_INFINITY;
-        for (double l : passive.omegaSquared()) {
-          gap = Math.min(gap, Math.abs(trial - Math.sqrt(Math.max(0, l))));
-        }
-        if (trial > 0 && gap > 1.2 * bestGap) {
-          best = trial;
-          bestGap = gap;
-        }
-      }
-      shifts[k] = best;
-    }
-    return shifts;
-  }
-
-  private int expected(PassiveModes.Spectrum passive, Rectangle region) {
-    double number = 1;
-    for (double l : passive.omegaSquared()) {
-      number += l > 0 && Math.sqrt(l) > region.bottom() && Math.sqrt(l) < region.top() ? 1 : 0;
-    }
-    for (LowRankTerm term : prepared.operator().lowRankTerms()) {
-      number += delay(term) * region.height() / (2 * Math.PI);
-    }
-    return (int) Math.min(number, 300);
-  }
-
-  private double step(Rectangle r) {
-    double delay = 0;
-    for (LowRankTerm term : prepared.operator().lowRankTerms()) {
-      delay = Math.max(delay, delay(term));
-    }
-    for (SparseTerm term : prepared.operator().sparseTerms()) {
-      delay = Math.max(delay, term.coefficient().longestDelay());
-    }
-    double longest = Math.max(r.width(), r.height());
-    return Math.min(longest / settings.contourPoints(), delay > 0 ? 1 / delay : longest);
-  }
-
-  private static double delay(LowRankTerm term) {
-    double delay = 0;
-    for (AnalyticFunction[] row : term.coefficient()) {
-      for (AnalyticFunction entry : row) {
-        delay = Math.max(delay, entry == null ? 0 : entry.longestDelay());
-      }
-    }
-    return delay;
   }
 
   private List<Polish.Polished> polish(SmallSearch.Outcome outcome, double[][] q, Rectangle reach) {

@@ -4,7 +4,6 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.stream.IntStream;
 import org.annulet.solver.dense.ComplexLu;
-import org.annulet.solver.dense.ComplexMatrix;
 import org.annulet.solver.sparse.LogDeterminant;
 import org.apache.commons.math3.complex.Complex;
 
@@ -83,17 +82,13 @@ public final class RootCount {
     return new Result(second, first == second, fine.size());
   }
 
-  /** Samples log det of a small matrix and its rate tr L⁻¹L′. */
+  /** Samples log det of a small matrix; its rate is a difference quotient over 1e-5 |s|. */
   static Sampled determinant(MatrixFunction f) {
     return s -> {
-      ComplexLu lu = new ComplexLu(f.value(s));
-      ComplexMatrix d = f.derivative(s);
-      lu.solve(d);
-      Complex trace = Complex.ZERO;
-      for (int i = 0; i < d.rows(); i++) {
-        trace = trace.add(d.get(i, i));
-      }
-      return new Sample(lu.logDeterminant(), trace);
+      Complex step = new Complex(0, 1e-5 * s.abs());
+      LogDeterminant here = new ComplexLu(f.value(s)).logDeterminant();
+      LogDeterminant there = new ComplexLu(f.value(s.add(step))).logDeterminant();
+      return new Sample(here, difference(here, there).divide(step));
     };
   }
 
@@ -108,12 +103,14 @@ public final class RootCount {
       double[][] beside = prepared.sparseValues(s.add(step));
       LogDeterminant there =
           prepared.analysis().factorComplex(beside[0], beside[1]).logDeterminant();
-      LogDeterminant here = at.sparseLogDeterminant();
-      Complex rate =
-          new Complex(there.logModulus() - here.logModulus(), reduced(there.phase() - here.phase()))
-              .divide(step);
+      Complex rate = difference(at.sparseLogDeterminant(), there).divide(step);
       return new Sample(at.logDeterminant(), rate.add(at.smallRate()));
     };
+  }
+
+  private static Complex difference(LogDeterminant here, LogDeterminant there) {
+    return new Complex(
+        there.logModulus() - here.logModulus(), reduced(there.phase() - here.phase()));
   }
 
   private static List<Complex> start(Rectangle r, Fineness fineness) {
