@@ -13,6 +13,7 @@ import java.util.regex.Pattern;
  */
 public record Quantity(double si, QuantityKind kind, String source) {
   private static final int LONGEST = 120;
+  private static final double LARGEST = 1e100;
   private static final Pattern NUMBER =
       Pattern.compile("[+-]?(?:[0-9]+\\.?[0-9]*|\\.[0-9]+)(?:[eE][+-]?[0-9]+)?");
   private static final Pattern NOT_FINITE =
@@ -94,7 +95,7 @@ public record Quantity(double si, QuantityKind kind, String source) {
   private static double convert(BigDecimal value, String unit, String all, QuantityKind kind) {
     if (unit.isEmpty()) {
       if (kind == QuantityKind.FRACTION) {
-        return value.doubleValue();
+        return physical(value.doubleValue(), all);
       }
       throw new UnitFault(
           "'" + all + "' has no unit; " + wanted(kind) + " is wanted", example(kind));
@@ -103,9 +104,16 @@ public record Quantity(double si, QuantityKind kind, String source) {
     if (!read.dimension().equals(kind.dimension())) {
       throw wrongKind(all, unit, read.dimension(), kind);
     }
-    double si = read.toSi(value);
-    if (Double.isInfinite(si)) {
-      throw new UnitFault("'" + all + "' is too large", "check the exponent and the unit");
+    return physical(read.toSi(value), all);
+  }
+
+  /** No quantity of nature is so large or so small that its cube leaves the range of a double. */
+  private static double physical(double si, String all) {
+    double size = Math.abs(si);
+    if (size > LARGEST || size > 0 && size < 1 / LARGEST) {
+      throw new UnitFault(
+          "'" + all + "' is too " + (size > 1 ? "large" : "small"),
+          "check the exponent and the unit");
     }
     return si;
   }

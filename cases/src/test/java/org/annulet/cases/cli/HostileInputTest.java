@@ -159,11 +159,18 @@ class HostileInputTest {
       }
       write(all);
       ExitStatus status = run(said, k % 50 == 0 ? "mesh" : "check");
-      judge(status, said.get(said.size() - 1), "seed " + seed + " round " + k + " " + name);
+      judge(
+          status,
+          said.get(said.size() - 1),
+          "seed " + seed + " round " + k + " " + name + "\n" + text(all.get(name)));
     }
     try (Stream<Path> there = Files.list(folder)) {
       assertThat(there.map(p -> p.getFileName().toString())).containsOnly("case", "out");
     }
+  }
+
+  private static String text(byte[] bytes) {
+    return new String(bytes, StandardCharsets.UTF_8);
   }
 
   private static byte[] mutated(byte[] good, Random random) {

@@ -110,6 +110,7 @@ class QuantityTest {
         "-.inf | GROWTH_RATE | not a finite number | 1/s",
         "1e999 m | LENGTH | too large | exponent",
         "1e-999 m | LENGTH | too small | exponent",
+        "1e-320 mm | LENGTH | too small | exponent",
         "12 | LENGTH | no unit | 12 mm",
         "0 | LENGTH | no unit | 12 mm",
         "mm | LENGTH | does not begin with a number | 12 mm",
