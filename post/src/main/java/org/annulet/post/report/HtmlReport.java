@@ -224,7 +224,9 @@ public final class HtmlReport {
         .append("</figcaption></figure>\n<ul class=\"plain\">");
     for (Certificate c : results.certificates()) {
       b.append("<li>").append(escape(c.sentence()));
-      c.notes().forEach(n -> b.append(' ').append(escape(n)));
+      if (!c.notes().isEmpty()) {
+        b.append("<br><small>").append(escape(String.join("; ", c.notes()))).append(".</small>");
+      }
       b.append("</li>");
     }
     b.append("</ul></section>\n");

@@ -57,9 +57,9 @@ final class Certifier {
           notes.add(
               String.format(
                   Locale.ROOT,
-                  "counted on a reduced operator of %d unknowns, independent of the search; against"
-                      + " the full operator its determinant departs on the contour by at most %.1e"
-                      + " of what Rouché's theorem allows",
+                  "counted on a reduced operator of %d unknowns, independent of the search; at the"
+                      + " points of the contour compared, its determinant departs from the full"
+                      + " operator's by at most %.1e of what Rouché's theorem allows",
                   reduced.size(),
                   result.departure()));
           return result.count();
