@@ -8,6 +8,7 @@ import org.annulet.cases.read.CaseFile;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.mesher.mesh.RingCells;
 import org.annulet.solver.assembly.AssembledProblem;
+import org.annulet.solver.assembly.AssemblyMemory;
 import org.annulet.solver.assembly.BlochAssembly;
 import org.annulet.solver.assembly.ProblemBuilder;
 import org.annulet.solver.assembly.Section;
@@ -42,23 +43,25 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
    * @throws CaseFaultException if the case cannot be set up
    */
   public static CaseProblem on(CaseFile caseFile, ChamberShape shape) {
-    CaseGas gas = new CaseGas(caseFile);
-    Medium medium = gas.on(shape.mesh());
-    CaseFlames flames = new CaseFlames(caseFile);
+    return on(caseFile, new CaseMemory(caseFile, shape));
+  }
+
+  /** The same with what was assembled before for cases like it. */
+  static CaseProblem on(CaseFile caseFile, CaseMemory memory) {
+    ChamberShape shape = memory.shape();
     if (shape.cells().isPresent()
-        && flames.allBurnersAlike()
+        && new CaseFlames(caseFile).allBurnersAlike()
         && CaseDampers.allBurnersAlike(caseFile)
         && caseFile.gas().even()) {
       RingCells cells = shape.cells().get();
-      BlochAssembly bloch =
-          builder(caseFile, cells.half(), shape, gas.on(cells.half())).bloch(cells);
+      BlochAssembly bloch = builder(caseFile, cells.half(), memory).bloch(cells);
       List<Part> parts = new ArrayList<>();
       for (int q = 0; q <= bloch.largestNumber(); q++) {
         parts.add(new Part("Bloch number " + q, null, bloch.multiplicity(q), bloch.number(q)));
       }
       return new CaseProblem(
           shape,
-          medium,
+          memory.medium(caseFile),
           parts,
           String.format(
               Locale.ROOT,
@@ -66,13 +69,19 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
               cells.count(),
               bloch.largestNumber()));
     }
-    return whole(caseFile, shape);
+    return whole(caseFile, memory);
   }
 
   /** The same without use of a ring's symmetry. */
   static CaseProblem whole(CaseFile caseFile, ChamberShape shape) {
-    Medium medium = new CaseGas(caseFile).on(shape.mesh());
-    ProblemBuilder builder = builder(caseFile, shape.mesh(), shape, medium);
+    return whole(caseFile, new CaseMemory(caseFile, shape));
+  }
+
+  /** The same without use of a ring's symmetry. */
+  static CaseProblem whole(CaseFile caseFile, CaseMemory memory) {
+    ChamberShape shape = memory.shape();
+    ProblemBuilder builder = builder(caseFile, shape.mesh(), memory);
+    Medium medium = memory.medium(caseFile);
     if (shape.geometry() instanceof Section) {
       SectionAssembly section = builder.section();
       List<Part> parts = new ArrayList<>();
@@ -98,12 +107,12 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
         : "Dampers break the symmetry";
   }
 
-  private static ProblemBuilder builder(
-      CaseFile caseFile, Mesh mesh, ChamberShape shape, Medium medium) {
-    ProblemBuilder b = new ProblemBuilder(mesh, shape.geometry(), medium);
+  private static ProblemBuilder builder(CaseFile caseFile, Mesh mesh, CaseMemory memory) {
+    AssemblyMemory assembled = memory.of(caseFile, mesh);
+    ProblemBuilder b = new ProblemBuilder(assembled);
     CaseWalls.put(caseFile, b);
-    CaseTwoPorts.put(caseFile, mesh, medium, b);
-    CaseDampers.put(caseFile, mesh, medium, b);
+    CaseTwoPorts.put(caseFile, mesh, assembled.medium(), b);
+    CaseDampers.put(caseFile, mesh, assembled.medium(), b);
     new CaseFlames(caseFile).all().forEach(b::flame);
     return b;
   }

@@ -1,7 +1,10 @@
 package org.annulet.solver.assembly;
 
+import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
+import java.util.concurrent.ConcurrentHashMap;
+import java.util.function.Supplier;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.solver.boundary.EdgeGas;
 import org.annulet.solver.medium.Medium;
@@ -22,6 +25,7 @@ final class Assembler {
   private final double scale;
   private final SymmetricPattern pattern;
   private final Element element;
+  private final Map<Object, Object> made = new ConcurrentHashMap<>();
 
   /**
    * @param size number of unknowns
@@ -100,7 +104,25 @@ final class Assembler {
   }
 
   double[][] coordinates() {
-    return UnknownMap.coordinates(nodes, pattern.size(), copies);
+    return once("coordinates", () -> UnknownMap.coordinates(nodes, pattern.size(), copies));
+  }
+
+  /**
+   * What depends on mesh, gas and the key alone: made at the first call, and the same object, not
+   * to be modified, at every later one. So operators that differ in their coefficients only share
+   * their arrays, and whoever projects them can tell.
+   *
+   * @param key of one kind of thing; compared by value
+   */
+  @SuppressWarnings("unchecked")
+  <T> T once(Object key, Supplier<T> make) {
+    Object before = made.get(key);
+    if (before == null) {
+      T now = make.get();
+      Object other = made.putIfAbsent(key, now);
+      before = other == null ? now : other;
+    }
+    return (T) before;
   }
 
   /** Fills in the matrix of one triangle, lower triangle row by row, shape [6]. */
@@ -110,15 +132,35 @@ final class Assembler {
   }
 
   double[] stiffness() {
-    return sum(element::stiffness);
+    return once("stiffness", () -> sum(element::stiffness));
+  }
+
+  /**
+   * With m² or k² times its cross part.
+   *
+   * @param crossFactor m² or k²
+   */
+  double[] stiffness(double crossFactor) {
+    return crossFactor == 0
+        ? stiffness()
+        : once(
+            List.of("stiffness", crossFactor),
+            () -> {
+              double[] sum = stiffness().clone();
+              double[] cross = crossStiffness();
+              for (int q = 0; q < sum.length; q++) {
+                sum[q] += crossFactor * cross[q];
+              }
+              return sum;
+            });
   }
 
   double[] crossStiffness() {
-    return sum(element::crossStiffness);
+    return once("cross stiffness", () -> sum(element::crossStiffness));
   }
 
   double[] mass() {
-    return sum(element::mass);
+    return once("mass", () -> sum(element::mass));
   }
 
   Element element() {

@@ -47,6 +47,18 @@ public final class BlochAssembly {
       throw new IllegalArgumentException(
           "Bloch number must lie in 0 to " + largestNumber() + ", got " + q);
     }
+    Cell cell = setup.cell(q, () -> cell(q));
+    return new AssembledProblem(
+        setup.operator(setup.matrices(cell.assembler), 0, 0),
+        cells.whole(),
+        ring,
+        (re, im) -> expand(q, cell.even, cell.odd, re, im));
+  }
+
+  /** Unknowns of a Bloch number and what is assembled on them. */
+  private record Cell(UnknownMap even, UnknownMap odd, Assembler assembler) {}
+
+  private Cell cell(int q) {
     boolean symmetric = multiplicity(q) == 1;
     double cos = !symmetric ? Math.cos(Math.PI * q / cells.count()) : q == 0 ? 1 : 0;
     double sin = !symmetric ? Math.sin(Math.PI * q / cells.count()) : q == 0 ? 0 : 1;
@@ -72,12 +84,7 @@ public final class BlochAssembly {
       even.factor()[v] = seam[v] ? cos : 1;
       odd.factor()[v] = seam[v] ? sin : 1;
     }
-    Setup.Matrices matrices = setup.matrices(assembler(symmetric, size, even, odd));
-    return new AssembledProblem(
-        setup.operator(matrices, 0, 0),
-        cells.whole(),
-        ring,
-        (re, im) -> expand(q, even, odd, re, im));
+    return new Cell(even, odd, assembler(symmetric, size, even, odd));
   }
 
   private synchronized Assembler assembler(

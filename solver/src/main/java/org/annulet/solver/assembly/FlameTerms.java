@@ -48,12 +48,11 @@ final class FlameTerms {
       return List.of(pointwise(flame, sheet));
     }
     checkStaging(flame);
-    FluxRows flux = flame.reference() instanceof Reference.EdgeFlux edge ? fluxRows(edge) : null;
     List<LowRankTerm> terms = new ArrayList<>();
     for (int burner = 1; burner <= sectors.count(); burner++) {
       Firing firing = flame.firing(burner);
       double heat = firing.heatRelease() / burnersSharing();
-      List<FluxRows.Row> heard = reference(flame.reference(), flux, burner, heat);
+      List<FluxRows.Row> heard = reference(flame.reference(), burner, heat);
       AnalyticFunction[][] phi = new AnalyticFunction[1][heard.size()];
       List<SparseVector> right = new ArrayList<>();
       for (int q = 0; q < heard.size(); q++) {
@@ -90,7 +89,17 @@ final class FlameTerms {
     return assembler.metric().geometry() instanceof Ring ring ? ring.burnerCount() : 1;
   }
 
+  private record PlaceKey(Place place, int burner) {}
+
+  private record MeanKey(Patch patch, String edge, int burner) {}
+
+  private record SlopeKey(Patch patch, double x, double y, int burner) {}
+
   private SparseVector heated(Place place, int burner) {
+    return assembler.once(new PlaceKey(place, burner), () -> newHeated(place, burner));
+  }
+
+  private SparseVector newHeated(Place place, int burner) {
     if (place instanceof Place.Spread spread) {
       return functionals.heat(spread.patch(), burner);
     }
@@ -121,25 +130,20 @@ final class FlameTerms {
     return own;
   }
 
-  private FluxRows fluxRows(Reference.EdgeFlux edge) {
-    return new FluxRows(assembler, side(edge), walls, crossFactor);
-  }
-
-  private EdgeSegments side(Reference.EdgeFlux edge) {
-    return EdgeSegments.of(assembler.nodes(), assembler.metric(), edge.edge(), edge.upstream());
-  }
-
   /** Rows g with their coefficients, so that Q̂ = −(heat · F) Σ coefficient · gᵀp / s. */
-  private List<FluxRows.Row> reference(
-      Reference reference, FluxRows flux, int burner, double heat) {
+  private List<FluxRows.Row> reference(Reference reference, int burner, double heat) {
     if (reference instanceof Reference.PatchVelocity v) {
-      SparseVector g = functionals.gradient(v, burner);
+      SparseVector g =
+          assembler.once(
+              new SlopeKey(v.patch(), v.directionX(), v.directionY(), burner),
+              () -> functionals.gradient(v, burner));
       return List.of(new FluxRows.Row(g, Analytic.constant(heat / v.meanVelocity())));
     }
     if (reference instanceof Reference.EdgeFlux v) {
-      EdgeSegments part = ofBurner(side(v), burner);
+      FluxRows flux = FluxRows.of(assembler, v, crossFactor);
+      FluxRows.Part part = flux.part(v, burner, () -> ofBurner(flux.edge(), burner));
       double factor = heat / (v.meanVelocity() * assembler.cellArea(part.area()));
-      return flux.through(part).stream()
+      return part.rows(walls).stream()
           .map(
               row ->
                   new FluxRows.Row(
@@ -148,10 +152,16 @@ final class FlameTerms {
     }
     SparseVector mean =
         reference instanceof Reference.PatchPressure p
-            ? functionals.mean(p.patch(), burner)
-            : functionals.mean(ofBurner(((Reference.EdgePressure) reference).edge(), burner));
+            ? assembler.once(
+                new MeanKey(p.patch(), "", burner), () -> functionals.mean(p.patch(), burner))
+            : onEdge(((Reference.EdgePressure) reference).edge(), burner);
     double factor = -heat / assembler.medium().meanPressure();
     return List.of(new FluxRows.Row(mean, Analytic.power(factor, 1)));
+  }
+
+  private SparseVector onEdge(String edge, int burner) {
+    return assembler.once(
+        new MeanKey(null, edge, burner), () -> functionals.mean(ofBurner(edge, burner)));
   }
 
   private LowRankTerm pointwise(Flame flame, Place.PointwiseSheet sheet) {
@@ -175,8 +185,8 @@ final class FlameTerms {
               + sheet.edge()
               + "' knows the mean velocity only, so the sheet cannot answer pointwise");
     }
-    EdgeSegments side = side(edge);
-    FluxRows flux = new FluxRows(assembler, side, walls, crossFactor);
+    FluxRows flux = FluxRows.of(assembler, edge, crossFactor);
+    EdgeSegments side = flux.edge();
     double factor = flame.firing().heatRelease() / (side.area() * edge.meanVelocity());
     Map<Integer, Double> strength = functionals.expansion(side);
     List<SparseVector> left = new ArrayList<>();
@@ -186,7 +196,7 @@ final class FlameTerms {
       int u = assembler.even().unknown()[v];
       if (u >= 0) {
         left.add(new SparseVector(new int[] {u}, new double[] {factor * strength.get(v)}));
-        all.add(flux.at(u));
+        all.add(flux.at(u, walls));
       }
     }
     int columns = all.stream().mapToInt(List::size).sum();

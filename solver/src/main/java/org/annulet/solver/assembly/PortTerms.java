@@ -51,7 +51,6 @@ final class PortTerms {
               + "' is not at the burner, where every cell can have one; take the whole ring");
     }
     double count = 1;
-    Map<Integer, Double> mean;
     if (placed.place() instanceof DamperPlace.OnEdge edge) {
       if (edge.count() > 1 && !(assembler.metric().geometry() instanceof Section)) {
         throw new IllegalArgumentException(
@@ -72,18 +71,23 @@ final class PortTerms {
                 + " are needed");
       }
       count = edge.count();
-      mean = meanOnEdge(edge);
-    } else {
-      mean = meanOnFace((DamperPlace.OnFace) placed.place());
     }
+    SparseVector b = assembler.once(placed.place(), () -> mouth(placed));
+    AnalyticFunction flow = Analytic.product(Analytic.constant(count), placed.damper().flow());
+    return new LowRankTerm(
+        "damper " + placed.name(), List.of(b), List.of(b), new AnalyticFunction[][] {{flow}});
+  }
+
+  private SparseVector mouth(PlacedDamper placed) {
+    Map<Integer, Double> mean =
+        placed.place() instanceof DamperPlace.OnEdge edge
+            ? meanOnEdge(edge)
+            : meanOnFace((DamperPlace.OnFace) placed.place());
     if (mean.isEmpty()) {
       throw new IllegalArgumentException(
           "damper '" + placed.name() + "' lies nowhere on " + placed.place());
     }
-    SparseVector b = assembler.evenVector(mean);
-    AnalyticFunction flow = Analytic.product(Analytic.constant(count), placed.damper().flow());
-    return new LowRankTerm(
-        "damper " + placed.name(), List.of(b), List.of(b), new AnalyticFunction[][] {{flow}});
+    return assembler.evenVector(mean);
   }
 
   private Map<Integer, Double> meanOnEdge(DamperPlace.OnEdge place) {
@@ -178,8 +182,15 @@ final class PortTerms {
     return nodal;
   }
 
-  /** One term for each burner of the mesh. */
-  List<LowRankTerm> of(PlacedTwoPort placed) {
+  /** What a two-port joins, without what it does. */
+  private record Sides(EdgeGas gas1, EdgeGas gas2, List<Mouths> burners) {}
+
+  /** Area in m² and means over the two mouths at one burner. */
+  private record Mouths(double area, SparseVector mean1, SparseVector mean2) {}
+
+  private record SidesKey(String edge1, Side upstream, String edge2) {}
+
+  private Sides sides(PlacedTwoPort placed) {
     CutMesh nodes = assembler.nodes();
     Metric metric = assembler.metric();
     EdgeSegments first;
@@ -191,25 +202,36 @@ final class PortTerms {
       first = EdgeSegments.of(nodes, metric, placed.edge1(), placed.upstream());
       second = first.opposite(nodes, metric);
     }
-    String what =
-        placed.edge1().equals(placed.edge2())
-            ? placed.edge1()
-            : placed.edge1() + " to " + placed.edge2();
-    EdgeGas gas1 = assembler.gas(first);
-    EdgeGas gas2 = assembler.gas(second);
-    AnalyticFunction[][] mobility = placed.port().mobility(gas1, gas2);
-    List<LowRankTerm> terms = new ArrayList<>();
+    List<Mouths> mouths = new ArrayList<>();
     for (int burner = 1; burner <= sectors.count(); burner++) {
       EdgeSegments own1 = first.ofBurner(assembler.mesh(), sectors, burner);
       EdgeSegments own2 = second.ofBurner(assembler.mesh(), sectors, burner);
       double area = assembler.cellArea(Math.min(own1.area(), own2.area()));
+      mouths.add(new Mouths(area, mean(own1), mean(own2)));
+    }
+    return new Sides(assembler.gas(first), assembler.gas(second), mouths);
+  }
+
+  /** One term for each burner of the mesh. */
+  List<LowRankTerm> of(PlacedTwoPort placed) {
+    Sides sides =
+        assembler.once(
+            new SidesKey(placed.edge1(), placed.upstream(), placed.edge2()), () -> sides(placed));
+    String what =
+        placed.edge1().equals(placed.edge2())
+            ? placed.edge1()
+            : placed.edge1() + " to " + placed.edge2();
+    AnalyticFunction[][] mobility = placed.port().mobility(sides.gas1, sides.gas2);
+    List<LowRankTerm> terms = new ArrayList<>();
+    for (int burner = 1; burner <= sectors.count(); burner++) {
+      Mouths mouths = sides.burners.get(burner - 1);
       AnalyticFunction[][] phi = new AnalyticFunction[2][2];
       for (int i = 0; i < 2; i++) {
         for (int k = 0; k < 2; k++) {
-          phi[i][k] = Analytic.product(Analytic.constant(area), mobility[i][k]);
+          phi[i][k] = Analytic.product(Analytic.constant(mouths.area), mobility[i][k]);
         }
       }
-      List<SparseVector> b = List.of(mean(own1), mean(own2));
+      List<SparseVector> b = List.of(mouths.mean1, mouths.mean2);
       String name = "two-port " + what + (sectors.count() > 1 ? " burner " + burner : "");
       terms.add(new LowRankTerm(name, b, b, phi));
     }

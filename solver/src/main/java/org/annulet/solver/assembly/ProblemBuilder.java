@@ -27,8 +27,8 @@ import org.annulet.solver.medium.Medium;
  * </pre>
  */
 public final class ProblemBuilder {
+  private final AssemblyMemory memory;
   private final Metric metric;
-  private final Medium medium;
   private final Map<String, Wall> walls = new LinkedHashMap<>();
   private final Map<Setup.FaceOf, Wall> faces = new LinkedHashMap<>();
   private final List<Flame> flames = new ArrayList<>();
@@ -44,8 +44,13 @@ public final class ProblemBuilder {
    * @throws IllegalArgumentException if they do not belong together
    */
   public ProblemBuilder(Mesh mesh, Geometry geometry, Medium medium) {
-    this.metric = new Metric(mesh, geometry);
-    this.medium = medium;
+    this(new AssemblyMemory(mesh, geometry, medium));
+  }
+
+  /** The same on what earlier builders with this memory have made. */
+  public ProblemBuilder(AssemblyMemory memory) {
+    this.memory = memory;
+    this.metric = memory.metric();
   }
 
   /**
@@ -131,8 +136,7 @@ public final class ProblemBuilder {
 
   private Setup setup() {
     return new Setup(
-        metric,
-        medium,
+        memory,
         new Setup.Parts(
             new LinkedHashMap<>(walls),
             new LinkedHashMap<>(faces),

@@ -6,7 +6,9 @@ import java.util.Map;
 import java.util.Set;
 import java.util.TreeMap;
 import java.util.TreeSet;
+import java.util.function.Supplier;
 import org.annulet.mesher.mesh.Mesh;
+import org.annulet.solver.boundary.EdgeGas;
 import org.annulet.solver.boundary.OpenEnd;
 import org.annulet.solver.boundary.ReactingWall;
 import org.annulet.solver.boundary.Wall;
@@ -21,9 +23,11 @@ import org.annulet.solver.operator.SparseTerm;
 
 /** All that was said about a problem, on a mesh; common to its orders and Bloch numbers. */
 final class Setup {
+  private final AssemblyMemory memory;
   private final Metric metric;
   private final Medium medium;
   private final CutMesh nodes;
+  private final NodesKey key;
   private final Map<String, Wall> walls;
   private final Map<FaceOf, Wall> faces;
   private final List<Flame> flames;
@@ -33,9 +37,19 @@ final class Setup {
   /** A face of a zone. */
   record FaceOf(int zone, Face face) {}
 
-  Setup(Metric metric, Medium medium, Parts parts) {
-    this.metric = metric;
-    this.medium = medium;
+  /** What decides which nodes carry which unknowns. */
+  private record NodesKey(Set<String> cuts, Set<String> open) {}
+
+  private record AxisKey(NodesKey nodes, Axis axis) {}
+
+  private record CellKey(NodesKey nodes, int number) {}
+
+  private record EdgeKey(String edge, String what) {}
+
+  Setup(AssemblyMemory memory, Parts parts) {
+    this.memory = memory;
+    this.metric = memory.metric();
+    this.medium = memory.medium();
     this.walls = parts.walls();
     this.faces = parts.faces();
     this.flames = parts.flames();
@@ -47,7 +61,16 @@ final class Setup {
         cuts.add(p.edge1());
       }
     }
-    this.nodes = new CutMesh(metric.mesh(), cuts);
+    Set<String> open = new TreeSet<>();
+    walls.forEach((edge, wall) -> addIfOpen(edge, wall, open));
+    this.key = new NodesKey(cuts, open);
+    this.nodes = memory.once(cuts, () -> new CutMesh(metric.mesh(), cuts));
+  }
+
+  private static void addIfOpen(String edge, Wall wall, Set<String> open) {
+    if (wall instanceof OpenEnd) {
+      open.add(edge);
+    }
   }
 
   /** Everything that is put into the gas and onto its walls. */
@@ -73,12 +96,7 @@ final class Setup {
   /** Whether p̂ = 0 is imposed at each node; on the axis too if asked for. */
   boolean[] eliminated(Axis axis) {
     boolean[] out = new boolean[nodes.nodeCount()];
-    walls.forEach(
-        (edge, wall) -> {
-          if (wall instanceof OpenEnd) {
-            mark(edge, out);
-          }
-        });
+    key.open().forEach(edge -> mark(edge, out));
     if (axis == Axis.NO_PRESSURE) {
       for (int v = 0; v < out.length; v++) {
         out[v] |= metric.onAxis(nodes.origin(v));
@@ -103,6 +121,10 @@ final class Setup {
   }
 
   Assembler assembler(Axis axis) {
+    return memory.once(new AxisKey(key, axis), () -> newAssembler(axis));
+  }
+
+  private Assembler newAssembler(Axis axis) {
     boolean[] zero = eliminated(axis);
     int[] unknown = new int[zero.length];
     double[] factor = new double[zero.length];
@@ -112,6 +134,11 @@ final class Setup {
       factor[v] = 1;
     }
     return new Assembler(nodes, metric, medium, n, new UnknownMap(unknown, factor));
+  }
+
+  /** A Bloch cell, made once. */
+  <T> T cell(int number, Supplier<T> make) {
+    return memory.once(new CellKey(key, number), make);
   }
 
   Assembler assembler(int size, UnknownMap even, UnknownMap odd) {
@@ -126,13 +153,7 @@ final class Setup {
   Matrices matrices(Assembler assembler) {
     List<WallPart> parts = parts(assembler);
     List<SparseTerm> terms = parts.stream().map(p -> p.term(assembler)).toList();
-    return new Matrices(
-        assembler,
-        assembler.stiffness(),
-        assembler.crossStiffness(),
-        assembler.mass(),
-        parts,
-        terms);
+    return new Matrices(assembler, parts, terms);
   }
 
   private List<WallPart> parts(Assembler assembler) {
@@ -140,16 +161,21 @@ final class Setup {
     walls.forEach(
         (name, wall) -> {
           if (wall instanceof ReactingWall reacting) {
-            EdgeSegments edge = EdgeSegments.ofBoundary(nodes, metric, name);
-            parts.add(new WallPart.OnEdge(edge, timesS(reacting.admittance(assembler.gas(edge)))));
+            EdgeSegments edge =
+                assembler.once(
+                    new EdgeKey(name, "wall"), () -> EdgeSegments.ofBoundary(nodes, metric, name));
+            EdgeGas gas = assembler.once(new EdgeKey(name, "gas"), () -> assembler.gas(edge));
+            parts.add(new WallPart.OnEdge(edge, timesS(reacting.admittance(gas))));
           }
         });
     faces.forEach(
         (at, wall) -> {
           if (wall instanceof ReactingWall reacting) {
-            parts.add(
-                new WallPart.OnFace(
-                    at.zone(), at.face(), timesS(reacting.admittance(assembler.gas(at.zone())))));
+            EdgeGas gas =
+                assembler.once(
+                    new EdgeKey(metric.mesh().zoneNames().get(at.zone()), "gas of the zone"),
+                    () -> assembler.gas(at.zone()));
+            parts.add(new WallPart.OnFace(at.zone(), at.face(), timesS(reacting.admittance(gas))));
           }
         });
     return parts;
@@ -162,25 +188,14 @@ final class Setup {
   /**
    * Matrices on one pattern.
    *
-   * @param stiffness without order
-   * @param cross stiffness to be multiplied by m² or k²
+   * @param parts walls where they are
+   * @param walls the same as terms of the operator
    */
-  record Matrices(
-      Assembler assembler,
-      double[] stiffness,
-      double[] cross,
-      double[] mass,
-      List<WallPart> parts,
-      List<SparseTerm> walls) {}
+  record Matrices(Assembler assembler, List<WallPart> parts, List<SparseTerm> walls) {}
 
   /** The operator at an azimuthal order (0 where there is none) and its m² or k². */
   AcousticOperator operator(Matrices m, int order, double crossFactor) {
-    double[] stiffness = m.stiffness().clone();
-    if (crossFactor != 0) {
-      for (int q = 0; q < stiffness.length; q++) {
-        stiffness[q] += crossFactor * m.cross()[q];
-      }
-    }
+    double[] stiffness = m.assembler().stiffness(crossFactor);
     Map<String, Side> cuts = new TreeMap<>();
     for (PortTerms.PlacedTwoPort port : twoPorts) {
       if (port.upstream() != null) {
@@ -202,7 +217,7 @@ final class Setup {
     return new AcousticOperator(
         m.assembler().pattern(),
         stiffness,
-        m.mass(),
+        m.assembler().mass(),
         m.walls(),
         List.copyOf(lowRank),
         m.assembler().coordinates());

@@ -11,6 +11,9 @@ sealed interface WallPart {
   /** s · y(s). */
   AnalyticFunction coefficient();
 
+  /** Where it is, in words. */
+  String place();
+
   /** The wall as a term of the operator. */
   SparseTerm term(Assembler assembler);
 
@@ -21,8 +24,14 @@ sealed interface WallPart {
   /** Along an edge. */
   record OnEdge(EdgeSegments edge, AnalyticFunction coefficient) implements WallPart {
     @Override
+    public String place() {
+      return edge.edge();
+    }
+
+    @Override
     public SparseTerm term(Assembler assembler) {
-      return new SparseTerm("wall " + edge.edge(), assembler.wall(edge), coefficient);
+      String name = "wall " + edge.edge();
+      return new SparseTerm(name, assembler.once(name, () -> assembler.wall(edge)), coefficient);
     }
 
     @Override
@@ -42,12 +51,18 @@ sealed interface WallPart {
   /** Over a face of a zone of a ring. */
   record OnFace(int zone, Face face, AnalyticFunction coefficient) implements WallPart {
     @Override
+    public String place() {
+      return zone + " " + face;
+    }
+
+    @Override
     public SparseTerm term(Assembler assembler) {
       String name =
           "wall "
               + assembler.mesh().zoneNames().get(zone)
               + (face == Face.INNER ? ".inner_face" : ".outer_face");
-      return new SparseTerm(name, assembler.face(zone, face), coefficient);
+      return new SparseTerm(
+          name, assembler.once(name, () -> assembler.face(zone, face)), coefficient);
     }
 
     @Override
