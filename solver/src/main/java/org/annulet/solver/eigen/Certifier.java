@@ -3,6 +3,7 @@ package org.annulet.solver.eigen;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.function.UnaryOperator;
 import org.apache.commons.math3.complex.Complex;
 
 /**
@@ -19,14 +20,22 @@ final class Certifier {
   private final SearchPlan plan;
   private final int largestContour;
   private final int small;
+  private final UnaryOperator<double[][]> damage;
   private final List<String> notes = new ArrayList<>();
 
   /**
    * A certifier.
    *
    * @param small unknowns up to which the full operator is counted at once
+   * @param damage done to the basis of the reduced count, by tests only
    */
-  Certifier(PreparedOperator prepared, SearchPlan plan, SearchSettings settings, int small) {
+  Certifier(
+      PreparedOperator prepared,
+      SearchPlan plan,
+      SearchSettings settings,
+      int small,
+      UnaryOperator<double[][]> damage) {
+    this.damage = damage;
     this.prepared = prepared;
     this.plan = plan;
     this.largestContour = settings.largestContour();
@@ -51,16 +60,20 @@ final class Certifier {
     if (prepared.size() > small && plan.passive().complete()) {
       for (int responses : RESPONSES) {
         ReducedCount reduced =
-            new ReducedCount(prepared, plan.basis(contour.top(), responses).columns());
+            new ReducedCount(
+                prepared, damage.apply(plan.basis(contour.top(), responses).columns()));
         ReducedCount.Result result = reduced.inside(contour, divided, fineness);
         if (result.certain()) {
           notes.add(
               String.format(
                   Locale.ROOT,
-                  "counted on a reduced operator of %d unknowns, independent of the search; at the"
-                      + " points of the contour compared, its determinant departs from the full"
-                      + " operator's by at most %.1e of what Rouché's theorem allows",
+                  "counted on a reduced operator of %d unknowns, made of the passive modes, which the"
+                      + " search uses too, and of responses at frequencies of its own; at %d points"
+                      + " of the contour its determinant departs from the full operator's by at"
+                      + " most %.1e of its size, where a third is tolerated; between those points"
+                      + " nothing was compared",
                   reduced.size(),
+                  ReducedCount.POINTS,
                   result.departure()));
           return result.count();
         }

@@ -33,9 +33,12 @@ public final class ModeSearch {
   private final List<String> notes = new ArrayList<>();
 
   /** Ways to damage the search on purpose, so that tests can see the certificate fail. */
-  record Spoilers(UnaryOperator<double[][]> basis, UnaryOperator<List<Polish.Polished>> modes) {
+  record Spoilers(
+      UnaryOperator<double[][]> basis,
+      UnaryOperator<List<Polish.Polished>> modes,
+      UnaryOperator<double[][]> countingBasis) {
     static Spoilers none() {
-      return new Spoilers(q -> q, m -> m);
+      return new Spoilers(q -> q, m -> m, q -> q);
     }
   }
 
@@ -76,7 +79,8 @@ public final class ModeSearch {
     List<Complex> poles = CoefficientPoles.in(prepared, region.grown(w, h, region.bottom() / 2));
     SearchPlan plan = new SearchPlan(prepared, window, settings);
     notes.addAll(plan.notes());
-    Certifier certifier = new Certifier(prepared, plan, settings, fullCount);
+    Certifier certifier =
+        new Certifier(prepared, plan, settings, fullCount, spoilers.countingBasis());
     PassiveModes.Spectrum passive = plan.passive();
     ReducedBasis basis =
         prepared.size() <= WHOLE_SPACE

@@ -10,22 +10,23 @@ import org.annulet.solver.sparse.SymmetricAnalysis;
 import org.annulet.solver.sparse.SymmetricPattern;
 import org.apache.commons.math3.complex.Complex;
 
-/**
- * An operator with its pattern analysed once, ready to be factorised at any s. Immutable and
- * thread-safe.
- */
+/** An operator with its pattern analysed once, ready to be factorised at any s. Thread-safe. */
 public final class PreparedOperator {
   private final AcousticOperator operator;
-  private final SymmetricAnalysis analysis;
+  private SymmetricAnalysis analysis;
   private final LowRank lowRank;
   private final List<WallMatrix> walls = new ArrayList<>();
 
-  /** Analyses the operator's pattern. */
+  /** Analyses the operator's pattern when it is first needed. */
   public PreparedOperator(AcousticOperator operator) {
-    this(operator, SparseSolver.analyse(operator.pattern(), operator.coordinates()));
+    this(operator, null);
   }
 
-  /** On an analysis made earlier, of the same pattern. */
+  /**
+   * On an analysis made earlier, of the same pattern.
+   *
+   * @param analysis null to have it made when it is first needed
+   */
   public PreparedOperator(AcousticOperator operator, SymmetricAnalysis analysis) {
     this.operator = operator;
     this.analysis = analysis;
@@ -41,7 +42,10 @@ public final class PreparedOperator {
   }
 
   /** The analysis of its pattern. */
-  public SymmetricAnalysis analysis() {
+  public synchronized SymmetricAnalysis analysis() {
+    if (analysis == null) {
+      analysis = SparseSolver.analyse(operator.pattern(), operator.coordinates());
+    }
     return analysis;
   }
 

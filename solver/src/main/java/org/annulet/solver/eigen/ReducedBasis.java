@@ -81,6 +81,14 @@ final class ReducedBasis {
 
   /** Adds what is new in x, M-orthonormalised. */
   boolean add(double[] x) {
+    return add(x, DROP);
+  }
+
+  /**
+   * The same with a stated share of x below which nothing is new. A field that is nearly held
+   * leaves a rough remainder, which weighs little but much in the backward error.
+   */
+  boolean add(double[] x, double drop) {
     double[] y = x.clone();
     double before = massNorm(y);
     if (!(before > 0) || Double.isInfinite(before)) {
@@ -93,7 +101,7 @@ final class ReducedBasis {
       }
     }
     double after = massNorm(y);
-    if (!(after > DROP)) {
+    if (!(after > drop)) {
       return false;
     }
     scale(y, 1 / after);

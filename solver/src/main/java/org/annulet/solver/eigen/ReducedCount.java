@@ -12,8 +12,7 @@ import org.apache.commons.math3.linear.QRDecomposition;
 import org.apache.commons.math3.linear.SingularMatrixException;
 
 /**
- * Counts the roots of a large operator on a small one and measures on the contour, against the full
- * operator, that both have the same number.
+ * Counts the roots of a large operator on a small one and compares both at points of the contour.
  *
  * <pre>
  *   det L(s) = det L_c(s) · e^{P(s)} · (1 + d(s)),    P a real polynomial in s
@@ -24,14 +23,17 @@ import org.apache.commons.math3.linear.SingularMatrixException;
  * whose number inertia certifies, and responses at other frequencies. What L_c leaves out are modes
  * far above the window, so that the ratio of the determinants is smooth: log |ratio| at {@value
  * #POINTS} points is fitted by P (nine coefficients), and the phases, which the fit has not seen,
- * must agree with it. A root that L_c lacks or has too much turns the phase by 2π along the contour
- * and no P can follow. The departure d is asked to stay below a third of what the theorem allows,
- * and L_c to have no root in a band on both sides of the contour, so that none of them can stand on
- * the other side of it than its own of L. Otherwise there is no answer, and the caller counts on
- * the full operator.
+ * must agree with it. The comparison is sampled: it shows that the two agree at those points and
+ * proves nothing between them. A root that L_c lacks or has too much turns the phase by 2π along
+ * the contour and no P can follow. The departure d is asked to stay below a third of what the
+ * theorem allows, and L_c to have no root in a band on both sides of the contour, so that none of
+ * them can stand on the other side of it than its own of L. Otherwise there is no answer, and the
+ * caller counts on the full operator.
  */
 final class ReducedCount {
-  private static final int POINTS = 24;
+  /** Points of the contour at which L and L_c are compared. */
+  static final int POINTS = 24;
+
   private static final int[] POWERS = {0, 1, 2, 3, 4, 5, 6, 8, 10};
   private static final double LARGEST_DEPARTURE = 1.0 / 3;
 

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import org.annulet.solver.modes.Window;
+import org.annulet.solver.operator.AcousticOperator;
 import org.annulet.solver.operator.AnalyticFunction;
 import org.annulet.solver.operator.LowRankTerm;
 import org.annulet.solver.operator.SparseTerm;
@@ -105,11 +106,15 @@ final class SearchPlan {
 
   /** Largest distance of contour points in 1/s: one radian of the longest delay. */
   double step(Rectangle r) {
+    return step(prepared.operator(), r, contourPoints);
+  }
+
+  static double step(AcousticOperator operator, Rectangle r, int contourPoints) {
     double delay = 0;
-    for (LowRankTerm term : prepared.operator().lowRankTerms()) {
+    for (LowRankTerm term : operator.lowRankTerms()) {
       delay = Math.max(delay, delay(term));
     }
-    for (SparseTerm term : prepared.operator().sparseTerms()) {
+    for (SparseTerm term : operator.sparseTerms()) {
       delay = Math.max(delay, term.coefficient().longestDelay());
     }
     double longest = Math.max(r.width(), r.height());

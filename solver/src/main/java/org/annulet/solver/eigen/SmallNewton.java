@@ -19,11 +19,24 @@ final class SmallNewton {
    * and at a semi-simple multiple one the root still converges while the vector keeps to the one
    * the start pointed at.
    *
-   * @return the root, or null if the iteration does not settle
+   * @return the root and its vector of unit length, or null if the iteration does not settle
    */
-  static Complex refine(MatrixFunction f, Complex start, ComplexMatrix vector) {
-    Complex s = start;
+  static Root refined(MatrixFunction f, Complex start, ComplexMatrix vector) {
     ComplexMatrix v = vector.copy();
+    Complex s = refineInPlace(f, start, v);
+    return s == null ? null : new Root(s, v);
+  }
+
+  /** A root and its vector, shape size × 1. */
+  record Root(Complex s, ComplexMatrix vector) {}
+
+  /** The same without the vector. */
+  static Complex refine(MatrixFunction f, Complex start, ComplexMatrix vector) {
+    return refineInPlace(f, start, vector.copy());
+  }
+
+  private static Complex refineInPlace(MatrixFunction f, Complex start, ComplexMatrix v) {
+    Complex s = start;
     v.scaleColumn(0, 1 / v.columnNorm(0));
     for (int k = 0; k < LARGEST_STEPS; k++) {
       ComplexLu lu = new ComplexLu(f.value(s));
@@ -35,7 +48,8 @@ final class SmallNewton {
       }
       Complex step = v.adjointTimes(x).get(0, 0).reciprocal();
       x.scaleColumn(0, 1 / norm);
-      v = x;
+      System.arraycopy(x.re()[0], 0, v.re()[0], 0, v.rows());
+      System.arraycopy(x.im()[0], 0, v.im()[0], 0, v.rows());
       s = s.subtract(step);
       if (!(step.abs() < 10 * start.abs())) {
         return null;

@@ -46,6 +46,21 @@ final class SmallSearch {
     this.step = step;
   }
 
+  /**
+   * Newton from roots of a problem close by; the count says whether that found them all.
+   *
+   * @param starts roots with vectors
+   */
+  Outcome from(List<SmallNewton.Root> starts) {
+    starts.parallelStream()
+        .map(r -> SmallNewton.refine(f, r.s(), r.vector()))
+        .filter(Objects::nonNull)
+        .filter(region::contains)
+        .toList()
+        .forEach(found::add);
+    return settle();
+  }
+
   /** Searches, starting from so many tiles that each holds about ten of the roots expected. */
   Outcome run(int expected, int finer) {
     int ny = Math.max(1, (expected + 9) / 10) * finer;

@@ -9,8 +9,8 @@ import java.util.List;
  * @param contour searched and counted, at least as large as the window
  * @param modes in the window, by frequency
  * @param outside modes found in the margin between window and contour
- * @param countByArgumentPrinciple eigenvalues inside the contour, with multiplicity, counted
- *     independently of the search; −1 when two counts of different fineness did not agree
+ * @param countByArgumentPrinciple eigenvalues inside the contour, with multiplicity, counted apart
+ *     from the search; −1 when two counts of different fineness did not agree
  * @param complete whether that count equals the number of modes found inside the contour and every
  *     one of them converged
  * @param notes plain sentences on anything a reader should know (margin moved, poles in the window,

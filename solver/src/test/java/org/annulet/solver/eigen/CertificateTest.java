@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.UnaryOperator;
 import org.annulet.solver.eigen.Gallery.Duct;
 import org.annulet.solver.eigen.Gallery.End;
 import org.annulet.solver.modes.Mode;
@@ -30,13 +31,7 @@ class CertificateTest {
     ModeSet set =
         spoiled(
             SearchSettings.standard(),
-            new ModeSearch.Spoilers(
-                q -> {
-                  double[][] half = new double[q.length / 2][];
-                  Arrays.setAll(half, i -> q[2 * i + 1]);
-                  return half;
-                },
-                m -> m));
+            new ModeSearch.Spoilers(CertificateTest::half, m -> m, q -> q));
 
     assertThat(set.complete()).isFalse();
     assertThat(set.countByArgumentPrinciple()).isEqualTo(5);
@@ -47,7 +42,7 @@ class CertificateTest {
     ModeSet set =
         spoiled(
             SearchSettings.standard(),
-            new ModeSearch.Spoilers(q -> q, m -> m.subList(1, m.size())));
+            new ModeSearch.Spoilers(q -> q, m -> m.subList(1, m.size()), q -> q));
 
     assertThat(set.complete()).isFalse();
     assertThat(set.countByArgumentPrinciple()).isEqualTo(5);
@@ -66,6 +61,62 @@ class CertificateTest {
   @Test
   void unspoiled_isComplete() {
     assertThat(spoiled(SearchSettings.standard(), ModeSearch.Spoilers.none()).complete()).isTrue();
+  }
+
+  /** Counted on a reduced operator although the duct is small. */
+  private static ModeSet reduced(UnaryOperator<double[][]> damage) {
+    return new ModeSearch(
+            strongFlame(),
+            WINDOW,
+            SearchSettings.standard(),
+            new ModeSearch.Spoilers(q -> q, m -> m, damage),
+            100)
+        .run();
+  }
+
+  @Test
+  void soundCountingBasis_isUsed() {
+    ModeSet set = reduced(q -> q);
+
+    assertThat(set.complete()).isTrue();
+    assertThat(set.countByArgumentPrinciple()).isEqualTo(5);
+    assertThat(set.notes()).anyMatch(n -> n.startsWith("counted on a reduced operator"));
+  }
+
+  @Test
+  void halfTheCountingBasisRemoved_theFullOperatorIsCounted() {
+    ModeSet set = reduced(CertificateTest::half);
+
+    assertThat(set.notes()).contains("counted on the full operator");
+    assertThat(set.complete()).isTrue();
+    assertThat(set.countByArgumentPrinciple()).isEqualTo(5);
+  }
+
+  @Test
+  void halfTheCountingBasis_departsByMoreThanItsSizeOnTheContour() {
+    PreparedOperator duct = strongFlame();
+    double[][] basis =
+        new SearchPlan(duct, WINDOW, SearchSettings.standard())
+            .basis(Rectangle.of(WINDOW).top(), 3)
+            .columns();
+    RootCount.Known nothing = new RootCount.Known(List.of(), List.of());
+    RootCount.Fineness fine = new RootCount.Fineness(200, 4000);
+    Rectangle contour = Rectangle.of(WINDOW);
+
+    ReducedCount.Result sound = new ReducedCount(duct, basis).inside(contour, nothing, fine);
+    ReducedCount.Result damaged =
+        new ReducedCount(duct, half(basis)).inside(contour, nothing, fine);
+
+    assertThat(sound.departure()).isLessThan(0.05);
+    assertThat(sound.certain()).isTrue();
+    assertThat(damaged.departure()).isGreaterThan(1);
+    assertThat(damaged.certain()).isFalse();
+  }
+
+  private static double[][] half(double[][] q) {
+    double[][] half = new double[q.length / 2][];
+    Arrays.setAll(half, i -> q[2 * i + 1]);
+    return half;
   }
 
   @Test
