@@ -31,7 +31,9 @@ import picocli.CommandLine.UnmatchedArgumentException;
       CheckVerb.class,
       MeshVerb.class,
       ModesVerb.class,
+      SweepVerb.class,
       DampersVerb.class,
+      MergeVerb.class,
       VerifyVerb.class
     })
 public final class Main implements Runnable {

@@ -6,8 +6,9 @@ import java.util.Optional;
  * The what-ifs of a case.
  *
  * @param dampers the dampers to be placed; empty when none are asked for
+ * @param sweep what is to be varied; empty when nothing is
  */
-public record Studies(Optional<DamperSearch> dampers) {
+public record Studies(Optional<DamperSearch> dampers, Optional<Sweep> sweep) {
   /** No study. */
-  static final Studies NONE = new Studies(Optional.empty());
+  static final Studies NONE = new Studies(Optional.empty(), Optional.empty());
 }

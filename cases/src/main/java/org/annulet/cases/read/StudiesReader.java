@@ -22,7 +22,8 @@ final class StudiesReader {
 
   Studies read(Entry entry) {
     Mapping m = Mapping.of(entry, CaseKeys.STUDIES);
-    return new Studies(m.get("dampers").flatMap(this::dampers));
+    return new Studies(
+        m.get("dampers").flatMap(this::dampers), m.get("sweep").flatMap(SweepReader::read));
   }
 
   private Optional<DamperSearch> dampers(Entry entry) {

@@ -23,8 +23,12 @@ public final class FullPoints implements PointSolver {
 
   /** Points near a case, whose mesh serves wherever the changed case can be drawn on it. */
   public FullPoints(CaseFile caseFile) {
+    this(caseFile, ChamberShape.of(caseFile));
+  }
+
+  FullPoints(CaseFile caseFile, ChamberShape shape) {
     this.caseFile = caseFile;
-    this.shape = ChamberShape.of(caseFile);
+    this.shape = shape;
     this.places = ShapePlaces.on(shape.mesh());
   }
 

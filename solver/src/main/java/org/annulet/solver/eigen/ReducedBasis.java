@@ -14,11 +14,18 @@ import org.annulet.solver.sparse.RealFactor;
 final class ReducedBasis {
   private static final double DROP = 1e-7;
   private final PreparedOperator prepared;
+  private final double drop;
   private final List<double[]> q = new ArrayList<>();
   private final List<double[]> mq = new ArrayList<>();
 
   ReducedBasis(PreparedOperator prepared) {
+    this(prepared, DROP);
+  }
+
+  /** One that drops what is new by less than a share of its length. */
+  ReducedBasis(PreparedOperator prepared, double drop) {
     this.prepared = prepared;
+    this.drop = drop;
   }
 
   /** The columns, shape [columns][n]. */
@@ -81,14 +88,14 @@ final class ReducedBasis {
 
   /** Adds what is new in x, M-orthonormalised. */
   boolean add(double[] x) {
-    return add(x, DROP);
+    return add(x, drop);
   }
 
   /**
    * The same with a stated share of x below which nothing is new. A field that is nearly held
    * leaves a rough remainder, which weighs little but much in the backward error.
    */
-  boolean add(double[] x, double drop) {
+  boolean add(double[] x, double smallest) {
     double[] y = x.clone();
     double before = massNorm(y);
     if (!(before > 0) || Double.isInfinite(before)) {
@@ -101,7 +108,7 @@ final class ReducedBasis {
       }
     }
     double after = massNorm(y);
-    if (!(after > drop)) {
+    if (!(after > smallest)) {
       return false;
     }
     scale(y, 1 / after);

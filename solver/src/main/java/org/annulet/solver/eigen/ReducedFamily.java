@@ -15,10 +15,11 @@ import org.apache.commons.math3.complex.Complex;
 /**
  * Operators that differ in some of their inputs, on one real basis for all: passive modes and
  * responses at some of them, and the modes themselves at training points wherever the basis so far
- * leaves a larger backward error than is wanted. A point costs small dense algebra; the backward
- * error of each of its modes is measured on its full operator, and a mode beyond the bound is
- * polished there. Immutable once trained and thread-safe; a point's answer does not depend on other
- * points.
+ * leaves a larger backward error than is wanted. Roots are sought and counted on its first, coarse
+ * part, which at every training point must give as many as the whole, and refined on the whole. A
+ * point costs small dense algebra; the backward error of each of its modes is measured on its full
+ * operator, and a mode beyond the bound is polished there. Immutable once trained and thread-safe;
+ * a point's answer does not depend on other points.
  */
 public final class ReducedFamily {
   private static final int RESPONSES = 3;
@@ -26,6 +27,16 @@ public final class ReducedFamily {
 
   /** Members closer than this share of |s| are an exact pair. */
   private static final double EXACT = 1e-10;
+
+  /**
+   * Share of a column that must be new for the coarse part of the basis, where roots are counted.
+   */
+  private static final double COARSE = 1e-3;
+
+  private static final double FINE = 1e-7;
+
+  /** Coarse and fine roots differ by less, over |s|, or all is done on the fine basis. */
+  private static final double ALIKE = 1e-3;
 
   /** Share of a mode that is rounding. */
   private static final double NOTHING_NEW = 1e-12;
@@ -44,6 +55,7 @@ public final class ReducedFamily {
   private final double bound;
   private final List<List<SmallNewton.Root>> known = new ArrayList<>();
   private RealProjections projections;
+  private int coarse;
   private int expected;
 
   /**
@@ -94,17 +106,19 @@ public final class ReducedFamily {
   private void train(int spanning) {
     PreparedOperator first = new PreparedOperator(training.get(0));
     ReducedBasis basis = new ReducedBasis(first);
+    List<double[][]> spans = new ArrayList<>();
     Set<double[]> seen = Collections.newSetFromMap(new IdentityHashMap<>());
     for (int i = 0; i < Math.min(spanning, training.size()); i++) {
       if (seen.add(training.get(i).stiffness())) {
         PreparedOperator here = i == 0 ? first : new PreparedOperator(training.get(i));
         SearchPlan plan = new SearchPlan(here, window, SearchSettings.standard());
         expected = Math.max(expected, plan.expected(region));
-        for (double[] v : plan.basis(region.top(), RESPONSES).columns()) {
-          basis.add(v);
-        }
+        addAll(basis, plan.basis(region.top(), RESPONSES, COARSE).columns(), COARSE);
+        spans.add(plan.basis(region.top(), RESPONSES).columns());
       }
     }
+    coarse = basis.size();
+    spans.forEach(span -> addAll(basis, span, FINE));
     for (AcousticOperator point : training) {
       projections = new RealProjections(basis.columns(), List.of(point));
       PreparedOperator prepared = new PreparedOperator(point, first.analysis());
@@ -117,13 +131,25 @@ public final class ReducedFamily {
     }
     projections = new RealProjections(basis.columns(), training);
     for (AcousticOperator point : training) {
-      known.add(small(point));
+      List<SmallNewton.Root> roots = small(point);
+      known.add(roots);
+      ReducedOperator fine = new ReducedOperator(point, projections, projections.size());
+      SmallSearch.Outcome few = onCoarse(point, List.of(), fine);
+      if (few == null || few.roots().size() != roots.size()) {
+        coarse = projections.size();
+      }
+    }
+  }
+
+  private static void addAll(ReducedBasis basis, double[][] columns, double drop) {
+    for (double[] v : columns) {
+      basis.add(v, drop);
     }
   }
 
   /** Roots of a training point with their vectors on the basis. */
   private List<SmallNewton.Root> small(AcousticOperator point) {
-    ReducedOperator f = new ReducedOperator(point, projections);
+    ReducedOperator f = new ReducedOperator(point, projections, projections.size());
     List<SmallNewton.Root> roots = new ArrayList<>();
     for (RootCluster c : search(point, f).run(expected, 1).clusters()) {
       for (int j = 0; j < c.values().length; j++) {
@@ -166,18 +192,77 @@ public final class ReducedFamily {
   }
 
   private Answer solve(PreparedOperator prepared, List<SmallNewton.Root> starts, double largest) {
-    ReducedOperator f = new ReducedOperator(prepared.operator(), projections);
-    SmallSearch search = search(prepared.operator(), f);
-    SmallSearch.Outcome outcome = starts.isEmpty() ? null : search.from(starts);
-    if (outcome == null || !outcome.agreed()) {
-      outcome = search.run(expected, 1);
+    ReducedOperator fine =
+        new ReducedOperator(prepared.operator(), projections, projections.size());
+    SmallSearch.Outcome outcome = onCoarse(prepared.operator(), starts, fine);
+    if (outcome == null) {
+      outcome = search(prepared.operator(), fine).run(expected, 1);
     }
     List<Root> roots = new ArrayList<>();
     for (RootCluster c : outcome.clusters()) {
-      roots.addAll(full(prepared, members(f, c), largest));
+      roots.addAll(full(prepared, members(fine, c), largest));
     }
     roots.sort((a, b) -> Double.compare(a.s.getImaginary(), b.s.getImaginary()));
     return new Answer(roots, outcome.agreed());
+  }
+
+  /**
+   * Searched and counted on the coarse part of the basis, the roots then refined on all of it; null
+   * where the count does not agree or a root moves too far on the way.
+   */
+  private SmallSearch.Outcome onCoarse(
+      AcousticOperator operator, List<SmallNewton.Root> starts, ReducedOperator fine) {
+    ReducedOperator f = new ReducedOperator(operator, projections, coarse);
+    SmallSearch search = search(operator, f);
+    SmallSearch.Outcome outcome =
+        starts.isEmpty()
+            ? null
+            : search.from(
+                starts.stream()
+                    .map(r -> new SmallNewton.Root(r.s(), rows(r.vector(), coarse)))
+                    .toList());
+    if (outcome == null || !outcome.agreed()) {
+      outcome = search.run(expected, 1);
+    }
+    if (!outcome.agreed()) {
+      return null;
+    }
+    List<RootCluster> refined = new ArrayList<>();
+    for (RootCluster c : outcome.clusters()) {
+      RootCluster better = refined(fine, c);
+      if (better == null) {
+        return null;
+      }
+      refined.add(better);
+    }
+    return new SmallSearch.Outcome(refined, true);
+  }
+
+  private static RootCluster refined(ReducedOperator fine, RootCluster c) {
+    Complex centre = c.centre();
+    int m = c.values().length;
+    RootCluster better;
+    if (m == 1) {
+      SmallNewton.Root root = SmallNewton.refined(fine, centre, rows(c.basis(), fine.size()));
+      better = root == null ? null : new RootCluster(new Complex[] {root.s()}, root.vector());
+    } else {
+      better = SmallNewton.cluster(fine, centre, ALIKE * centre.abs(), m);
+    }
+    return better == null
+            || better.values().length != m
+            || better.centre().subtract(centre).abs() > ALIKE * centre.abs()
+        ? null
+        : better;
+  }
+
+  /** The first rows of columns, or all of them with zeros below. */
+  private static ComplexMatrix rows(ComplexMatrix x, int rows) {
+    ComplexMatrix y = new ComplexMatrix(rows, x.columns());
+    for (int j = 0; j < x.columns(); j++) {
+      System.arraycopy(x.re()[j], 0, y.re()[j], 0, Math.min(rows, x.rows()));
+      System.arraycopy(x.im()[j], 0, y.im()[j], 0, Math.min(rows, x.rows()));
+    }
+    return y;
   }
 
   /** The roots of a cluster told apart, each with its vector; an exact pair keeps its basis. */

@@ -11,8 +11,11 @@ import org.annulet.solver.operator.SparseTerm;
 import org.annulet.solver.operator.SparseVector;
 import org.apache.commons.math3.complex.Complex;
 
-/** Qᵀ L(s) Q on real columns: real matrices with the coefficients of the full operator. */
+/**
+ * Qᵀ L(s) Q on the first real columns: real matrices with the coefficients of the full operator.
+ */
 final class ReducedOperator implements MatrixFunction {
+  private final int columns;
   private final double[][] stiffness;
   private final double[][] mass;
   private final List<SparseTerm> terms;
@@ -22,7 +25,13 @@ final class ReducedOperator implements MatrixFunction {
   /** A term of low rank: left, right shape [vectors][size]. */
   private record Block(double[][] left, double[][] right, AnalyticFunction[][] coefficient) {}
 
-  ReducedOperator(AcousticOperator op, RealProjections projections) {
+  /**
+   * Projects.
+   *
+   * @param columns how many of the basis are used, from the first
+   */
+  ReducedOperator(AcousticOperator op, RealProjections projections, int columns) {
+    this.columns = columns;
     stiffness = projections.of(op.pattern(), op.stiffness());
     mass = projections.of(op.pattern(), op.mass());
     terms = op.sparseTerms();
@@ -45,7 +54,7 @@ final class ReducedOperator implements MatrixFunction {
 
   @Override
   public int size() {
-    return stiffness.length;
+    return columns;
   }
 
   @Override
@@ -96,7 +105,7 @@ final class ReducedOperator implements MatrixFunction {
   }
 
   private static void add(ComplexMatrix l, double[][] a, double re, double im) {
-    for (int j = 0; j < a.length; j++) {
+    for (int j = 0; j < l.columns(); j++) {
       if (re != 0) {
         axpy(re, a[j], l.re()[j]);
       }

@@ -55,7 +55,15 @@ final class SearchPlan {
 
   /** A basis of the passive modes and of responses at so many frequencies below {@code top}. */
   ReducedBasis basis(double top, int responses) {
-    ReducedBasis basis = new ReducedBasis(prepared);
+    return filled(new ReducedBasis(prepared), top, responses);
+  }
+
+  /** The same, smaller: without what is new by less than a share {@code drop} of its length. */
+  ReducedBasis basis(double top, int responses, double drop) {
+    return filled(new ReducedBasis(prepared, drop), top, responses);
+  }
+
+  private ReducedBasis filled(ReducedBasis basis, double top, int responses) {
     for (double[] v : passive.vectors()) {
       basis.add(v);
     }
