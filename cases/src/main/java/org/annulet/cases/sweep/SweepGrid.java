@@ -87,12 +87,19 @@ public final class SweepGrid {
     }
     List<Problem> problems = new ArrayList<>();
     for (Problem p : reading.problems()) {
-      String axis = sweep.along().inputs().containsKey(p.key()) ? "along" : "across";
-      String key = "studies.sweep." + (isMap() ? axis : "along") + ".set." + p.key();
+      String input =
+          set.keySet().stream()
+              .filter(k -> k.startsWith(p.key()) || p.key().startsWith(k))
+              .findFirst()
+              .orElse(set.keySet().iterator().next());
+      String axis = sweep.along().inputs().containsKey(input) ? "along" : "across";
       problems.add(
           caseFile
               .source()
-              .problem(key, p.key() + " set to " + set.get(p.key()) + ": " + p.what(), p.mend()));
+              .problem(
+                  "studies.sweep." + axis + ".set." + input,
+                  "set to " + set.get(input) + ": " + p.key() + ": " + p.what(),
+                  p.mend()));
     }
     throw new CaseFaultException(problems);
   }

@@ -93,6 +93,59 @@ class CommandLineTest {
     }
   }
 
+  private static final String SWEPT =
+      DUCT
+          + "walls: {right: {admittance: 0.1}}\n"
+          + "studies: {sweep: {along: {points: 4, set: {gas.zones.duct.sound_speed: [330 m/s, 350"
+          + " m/s]}}}}\n";
+
+  @Test
+  void sweepInParts_isMergedIntoTheFilesOfTheWhole() throws IOException {
+    String whole = folder.resolve("whole").toString();
+    String parts = folder.resolve("parts").toString();
+    assertThat(run("sweep", duct(SWEPT).toString(), "--out", whole)).isEqualTo(ExitStatus.DONE);
+    assertThat(printed())
+        .contains("2 modes followed over gas.zones.duct.sound_speed in m/s; none grows anywhere.");
+    assertThat(run("sweep", folder.toString(), "--out", parts, "--part", "2/2"))
+        .isEqualTo(ExitStatus.DONE);
+    assertThat(run("merge", folder.toString(), "--out", parts)).isEqualTo(ExitStatus.NOT_CERTIFIED);
+    assertThat(complained()).contains("annulet sweep CASE --part 1/2");
+    assertThat(run("sweep", folder.toString(), "--out", parts, "--part", "1/2"))
+        .isEqualTo(ExitStatus.DONE);
+    assertThat(run("merge", folder.toString(), "--out", parts)).isEqualTo(ExitStatus.DONE);
+    for (String name : List.of("sweep.csv", "sweep.html", "sweep.json")) {
+      assertThat(Path.of(parts, name)).hasSameBinaryContentAs(Path.of(whole, name));
+    }
+  }
+
+  @Test
+  void sweepOfAChangedCase_doesNotMixWithOldPoints() throws IOException {
+    String results = folder.resolve("results").toString();
+    run("sweep", duct(SWEPT).toString(), "--out", results);
+    ExitStatus status =
+        run("sweep", duct(SWEPT.replace("0.1}", "0.2}")).toString(), "--out", results);
+    assertThat(status).isEqualTo(ExitStatus.OUT_OF_RESOURCES);
+    assertThat(complained()).contains("points of another case, study or version; delete it");
+  }
+
+  @Test
+  void sweepThatLeavesWhatIsAllowed_isStatus2_atTheSweptInput() throws IOException {
+    ExitStatus status =
+        run("sweep", duct(SWEPT.replace("350 m/s", "900 m/s")).toString(), "--out", "x");
+    assertThat(status).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained()).contains("studies.sweep.along.set.gas.zones.duct.sound_speed");
+  }
+
+  @Test
+  void mergeWithoutParts_andPartsThatCannotBe_areMisuse() throws IOException {
+    duct(SWEPT);
+    assertThat(run("merge", folder.toString(), "--out", folder.resolve("none").toString()))
+        .isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(run("sweep", folder.toString(), "--part", "3/2")).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(run("sweep", duct(DUCT).toString())).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained()).contains("the case asks for no sweep").contains("part 3/2");
+  }
+
   @Test
   void quiet_printsNothing_butStillWrites() throws IOException {
     ExitStatus status =
