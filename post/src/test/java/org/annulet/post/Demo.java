@@ -13,6 +13,7 @@ import org.annulet.post.meaning.ModeLabel;
 import org.annulet.post.meaning.ModeMaps;
 import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.ParameterSensitivity;
+import org.annulet.post.meaning.PointSensitivity;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.modes.Mode;
 import org.annulet.solver.modes.Window;
@@ -86,6 +87,10 @@ public final class Demo {
                           "flames.<1>.response.delay", "2.1 ms", 0.1 * (i + 1), -0.02, 3.5),
                       new ParameterSensitivity(
                           "gas.zones.chamber.temperature", "1850 K", -0.05, 1.2, 250)))
+              .withPoints(
+                  List.of(
+                      new PointSensitivity(
+                          "geometry.points.corner.2", "corner", "r", "180 mm", -0.4, -0.3, 12)))
               .with(maps(views.get(i))));
     }
     results =

@@ -88,18 +88,20 @@ public record ChamberShape(
   }
 
   private static EdgeCurves curves(CaseFile caseFile) {
-    org.annulet.cases.read.Outline read = outline(caseFile.geometry());
-    return read == null ? EdgeCurves.STRAIGHT : new OutlineCurves(DrawnShape.outline(read));
+    return outline(caseFile.geometry())
+        .<EdgeCurves>map(read -> new OutlineCurves(DrawnShape.outline(read)))
+        .orElse(EdgeCurves.STRAIGHT);
   }
 
-  private static org.annulet.cases.read.Outline outline(Geometry g) {
+  /** The outline a geometry is drawn by; none of a ring and of a mesh made elsewhere. */
+  static Optional<org.annulet.cases.read.Outline> outline(Geometry g) {
     if (g instanceof Geometry.Section section) {
-      return section.outline();
+      return Optional.of(section.outline());
     }
     if (g instanceof Geometry.CrossSection cross) {
-      return cross.outline();
+      return Optional.of(cross.outline());
     }
-    return g instanceof Geometry.Plane plane ? plane.outline() : null;
+    return g instanceof Geometry.Plane plane ? Optional.of(plane.outline()) : Optional.empty();
   }
 
   private static ChamberShape mesh(CaseFile caseFile, double scale) {

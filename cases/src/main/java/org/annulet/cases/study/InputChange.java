@@ -1,5 +1,6 @@
 package org.annulet.cases.study;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -21,6 +22,9 @@ record InputChange(CaseSource.Value value, CaseFile smaller, CaseFile larger) {
    * delay of ωτ turns; its second difference by rounding over the square of the step.
    */
   static final double STEP = 2e-4;
+
+  /** m, mm, cm and µm in m. */
+  private static final double[] LENGTH_UNITS = {1, 1e-3, 1e-2, 1e-6};
 
   /** Parts of a case that do not enter its operators, or only through the mesh. */
   private static final List<String> NOT_INPUTS =
@@ -70,10 +74,32 @@ record InputChange(CaseSource.Value value, CaseFile smaller, CaseFile larger) {
   private static Optional<CaseFile> changed(
       CaseFile caseFile, CaseSource.Value value, double factor) {
     double wanted = value.si() * factor;
-    String number = Double.toString(wanted);
     // A list may state its unit once; there the numbers carry none.
-    for (String text :
-        List.of((number + " " + value.kind().siUnit()).strip(), scaled(value.text(), factor))) {
+    return changed(
+        caseFile, value, wanted, List.of(withUnit(value, wanted), scaled(value.text(), factor)));
+  }
+
+  /**
+   * The case with a length set to another value, which may have been zero.
+   *
+   * @param wanted in m
+   */
+  static Optional<CaseFile> to(CaseFile caseFile, CaseSource.Value value, double wanted) {
+    List<String> texts = new ArrayList<>(List.of(withUnit(value, wanted)));
+    // Bare numbers take the unit their list states: the reading tells which it is.
+    for (double unit : LENGTH_UNITS) {
+      texts.add(String.format(Locale.ROOT, "%.17g", wanted / unit));
+    }
+    return changed(caseFile, value, wanted, texts);
+  }
+
+  private static String withUnit(CaseSource.Value value, double wanted) {
+    return (wanted + " " + value.kind().siUnit()).strip();
+  }
+
+  private static Optional<CaseFile> changed(
+      CaseFile caseFile, CaseSource.Value value, double wanted, List<String> texts) {
+    for (String text : texts) {
       if (text.isEmpty()) {
         continue;
       }

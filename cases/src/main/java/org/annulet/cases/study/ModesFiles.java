@@ -19,11 +19,13 @@ import org.annulet.post.meaning.Chamber;
 import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.NodeLine;
+import org.annulet.post.meaning.Results;
 import org.annulet.post.report.Fact;
 import org.annulet.post.report.HtmlReport;
 import org.annulet.post.report.ReportInput;
 import org.annulet.post.table.ModesCsv;
 import org.annulet.post.table.ModesJson;
+import org.annulet.post.table.PointsCsv;
 import org.annulet.post.table.SensitivitiesCsv;
 import org.annulet.post.table.ShapesCsv;
 import org.annulet.post.table.TextTables;
@@ -54,6 +56,7 @@ public final class ModesFiles {
     ModesJson.write(folder.resolve("modes.json"), answer.results());
     ModesCsv.write(folder.resolve("modes.csv"), answer.results());
     SensitivitiesCsv.write(folder.resolve("sensitivities.csv"), answer.results());
+    points(folder.resolve("points.csv"), answer.results());
     WholeFile.write(folder.resolve("modes.md"), TextTables.markdown(answer.results()));
     WholeFile.write(
         folder.resolve("spectrum.svg"),
@@ -87,6 +90,15 @@ public final class ModesFiles {
         && (long) mesh.nodeCount() * SWEPT_FACETS < MOST_SWEPT_POINTS) {
       new ModeFiles(folder, chamber, Surface.swept(mesh, 2 * Math.PI, SWEPT_FACETS))
           .modes("swept", views);
+    }
+  }
+
+  /** What the points of an outline do; no file where there is none to move. */
+  private static void points(Path file, Results results) throws IOException {
+    if (results.modes().stream().allMatch(e -> e.points().isEmpty())) {
+      Files.deleteIfExists(file);
+    } else {
+      PointsCsv.write(file, results);
     }
   }
 

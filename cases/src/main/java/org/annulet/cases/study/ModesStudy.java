@@ -13,7 +13,6 @@ import org.annulet.cases.read.CaseFile;
 import org.annulet.mesher.mesh.Mesh;
 import org.annulet.post.meaning.Certificate;
 import org.annulet.post.meaning.Chamber;
-import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.Labels;
 import org.annulet.post.meaning.ModeEntry;
@@ -22,6 +21,7 @@ import org.annulet.post.meaning.ModeLabel.Origin;
 import org.annulet.post.meaning.ModeMaps;
 import org.annulet.post.meaning.ModeView;
 import org.annulet.post.meaning.ParameterSensitivity;
+import org.annulet.post.meaning.PointSensitivity;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.assembly.AssembledProblem;
 import org.annulet.solver.assembly.NodalField;
@@ -39,7 +39,7 @@ import org.annulet.solver.operator.AcousticOperator;
 /** Every mode of a case in its window, labelled and certified. */
 public final class ModesStudy {
   /** Nested meshes: three show the order of convergence of each mode. */
-  private static final int LEVELS = 3;
+  static final int LEVELS = 3;
 
   /** How much is asked of each mode. */
   private enum Depth {
@@ -132,13 +132,13 @@ public final class ModesStudy {
               + String.join(", ", study.leftOut())
               + ".");
     }
-    if (chamber.kind() != GeometryKind.RING) {
-      notes.add("Sensitivities to the shape of the outline are not computed.");
-    }
+    OutlineSensitivities outline = new OutlineSensitivities(caseFile, found.problem, groups);
+    Map<Mode, List<PointSensitivity>> points = outline.run();
+    outline.sentence().ifPresent(notes::add);
     List<ModeEntry> out = new ArrayList<>();
     for (int i = 0; i < entries.size(); i++) {
       Mode own = found.inside.get(i).own;
-      out.add(entries.get(i).with(tables.get(own)).with(maps.get(own)));
+      out.add(entries.get(i).with(tables.get(own)).withPoints(points.get(own)).with(maps.get(own)));
     }
     Maps.sentence(chamber, out).ifPresent(notes::add);
     return out;

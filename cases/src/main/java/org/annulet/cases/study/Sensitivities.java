@@ -92,7 +92,7 @@ final class Sensitivities {
     CaseProblem larger = more.get();
     List<Effect> effects = new ArrayList<>();
     for (DerivedModes g : groups) {
-      if (!comparable(g, smaller) || !comparable(g, larger)) {
+      if (!comparable(problem, smaller, g) || !comparable(problem, larger, g)) {
         note(value);
         return Optional.empty();
       }
@@ -163,13 +163,14 @@ final class Sensitivities {
     }
   }
 
-  private boolean comparable(DerivedModes g, CaseProblem changed) {
+  /** Whether a changed case has the unknowns of the case at hand. */
+  static boolean comparable(CaseProblem problem, CaseProblem changed, DerivedModes g) {
     return changed.parts().size() == problem.parts().size()
         && DifferenceOfOperators.comparable(
             g.derivative().prepared().operator(), operator(changed, g.part()));
   }
 
-  private static AcousticOperator operator(CaseProblem problem, int part) {
+  static AcousticOperator operator(CaseProblem problem, int part) {
     return problem.parts().get(part).assembled().operator();
   }
 

@@ -11,6 +11,7 @@ import java.util.Optional;
  * @param budget growth budget, where it was made
  * @param sensitivities to the inputs of the case, the strongest effect on the growth rate first;
  *     empty where they were not computed
+ * @param points sensitivities to the points of the outline, in the same order; empty without one
  * @param maps where a damper acts and where the flames drive, where they were made
  */
 public record ModeEntry(
@@ -18,25 +19,32 @@ public record ModeEntry(
     ModeLabel label,
     Optional<GrowthBudget> budget,
     List<ParameterSensitivity> sensitivities,
+    List<PointSensitivity> points,
     Optional<ModeMaps> maps) {
-  /** Copies the list. */
+  /** Copies the lists. */
   public ModeEntry {
     sensitivities = List.copyOf(sensitivities);
+    points = List.copyOf(points);
   }
 
   /** Without sensitivities and maps. */
   public ModeEntry(ModeView view, ModeLabel label, Optional<GrowthBudget> budget) {
-    this(view, label, budget, List.of(), Optional.empty());
+    this(view, label, budget, List.of(), List.of(), Optional.empty());
   }
 
   /** The same with maps. */
   public ModeEntry with(ModeMaps made) {
-    return new ModeEntry(view, label, budget, sensitivities, Optional.of(made));
+    return new ModeEntry(view, label, budget, sensitivities, points, Optional.of(made));
   }
 
   /** The same with sensitivities. */
   public ModeEntry with(List<ParameterSensitivity> all) {
-    return new ModeEntry(view, label, budget, all, maps);
+    return new ModeEntry(view, label, budget, all, points, maps);
+  }
+
+  /** The same with sensitivities to the points of the outline. */
+  public ModeEntry withPoints(List<PointSensitivity> all) {
+    return new ModeEntry(view, label, budget, sensitivities, all, maps);
   }
 
   /** Rounding of a growth rate per |s|: sums over the mesh in double precision keep about this. */

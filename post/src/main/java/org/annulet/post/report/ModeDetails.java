@@ -10,7 +10,6 @@ import org.annulet.post.meaning.GeometryKind;
 import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
-import org.annulet.post.meaning.ParameterSensitivity;
 import org.annulet.post.table.Numbers;
 
 /** What stands beside the moving field of a mode: facts, growth budget, sensitivities. */
@@ -131,40 +130,73 @@ final class ModeDetails {
         .append("%\"></i></span>");
   }
 
+  /** One bar of a table of levers. */
+  private record Lever(String name, String value, double growth, double frequency, String range) {}
+
   /** Ranked bars of what one percent more of each input does; nothing where it was not computed. */
   static void levers(StringBuilder b, ModeEntry e) {
-    List<ParameterSensitivity> all = e.sensitivities();
+    levers(
+        b,
+        "What one percent more does",
+        e.sensitivities().stream()
+            .map(
+                s ->
+                    new Lever(
+                        s.key(),
+                        s.value(),
+                        s.growthPerPercent(),
+                        s.frequencyPerPercent(),
+                        range(s.linearRange())))
+            .toList(),
+        "First order, all other inputs held; it holds to a tenth within the range given. Weaker"
+            + " inputs, in sensitivities.csv: ");
+    levers(
+        b,
+        "What one millimetre more does",
+        e.points().stream()
+            .map(
+                s ->
+                    new Lever(
+                        s.coordinate() + " of " + s.point(),
+                        s.value(),
+                        s.growthPerMillimetre(),
+                        s.frequencyPerMillimetre(),
+                        millimetres(s.linearRange())))
+            .toList(),
+        "First order, all other points held, edges follow; effects of points moved together add."
+            + " Weaker points, in points.csv: ");
+  }
+
+  private static void levers(StringBuilder b, String title, List<Lever> all, String foot) {
     if (all.isEmpty()) {
       return;
     }
-    List<ParameterSensitivity> top = all.subList(0, Math.min(ITEMS, all.size()));
-    double largest = top.stream().mapToDouble(s -> Math.abs(s.growthPerPercent())).max().orElse(0);
-    b.append("<div class=\"bars levers\"><h4>What one percent more does</h4>\n")
+    List<Lever> top = all.subList(0, Math.min(ITEMS, all.size()));
+    double largest = top.stream().mapToDouble(s -> Math.abs(s.growth)).max().orElse(0);
+    b.append("<div class=\"bars levers\"><h4>")
+        .append(title)
+        .append("</h4>\n")
         .append("<div class=\"bar head\"><span></span><span></span><span>growth [1/s]</span>")
         .append("<span>frequency [Hz]</span><span>holds within</span></div>\n");
-    for (ParameterSensitivity s : top) {
+    for (Lever s : top) {
       b.append("<div class=\"bar\"><span>")
-          .append(escape(s.key()))
+          .append(escape(s.name))
           .append(" <small>")
-          .append(escape(s.value()))
+          .append(escape(s.value))
           .append("</small></span>");
-      track(b, largest > 0 ? s.growthPerPercent() / largest : 0);
+      track(b, largest > 0 ? s.growth / largest : 0);
       b.append("<span>")
-          .append(Numbers.signed(s.growthPerPercent()).replace('-', '−'))
+          .append(Numbers.signed(s.growth).replace('-', '−'))
           .append("</span><span>")
-          .append(Numbers.signed(s.frequencyPerPercent()).replace('-', '−'))
+          .append(Numbers.signed(s.frequency).replace('-', '−'))
           .append("</span><span>")
-          .append(range(s.linearRange()))
+          .append(s.range)
           .append("</span></div>\n");
     }
-    b.append("<p class=\"sign\">First order, all other inputs held; it holds to a tenth within the")
-        .append(" range given.");
-    if (all.size() > top.size()) {
-      b.append(" Weaker inputs, in sensitivities.csv: ")
-          .append(all.size() - top.size())
-          .append('.');
-    }
-    b.append("</p></div>\n");
+    b.append("<p class=\"sign\">")
+        .append(foot)
+        .append(all.size() - top.size())
+        .append(".</p></div>\n");
   }
 
   /** How far a straight line serves, in percent of the input. */
@@ -173,5 +205,13 @@ final class ModeDetails {
       return "±100 %";
     }
     return String.format(Locale.ROOT, percent < 1 ? "±%.1g %%" : "±%.0f %%", percent);
+  }
+
+  /** How far a straight line serves, in mm. */
+  private static String millimetres(double range) {
+    if (!(range < 1000)) {
+      return "±1 m";
+    }
+    return String.format(Locale.ROOT, range < 1 ? "±%.1g mm" : "±%.0f mm", range);
   }
 }

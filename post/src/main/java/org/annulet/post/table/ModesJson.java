@@ -10,6 +10,7 @@ import org.annulet.post.meaning.GrowthBudget;
 import org.annulet.post.meaning.ModeEntry;
 import org.annulet.post.meaning.ModeLabel;
 import org.annulet.post.meaning.ParameterSensitivity;
+import org.annulet.post.meaning.PointSensitivity;
 import org.annulet.post.meaning.Results;
 import org.annulet.solver.modes.Mode;
 
@@ -80,6 +81,22 @@ public final class ModesJson {
     json.endArray();
   }
 
+  private static void points(JsonWriter json, List<PointSensitivity> all) {
+    json.array("point_sensitivities");
+    for (PointSensitivity s : all) {
+      json.object()
+          .text("key", s.key())
+          .text("point", s.point())
+          .text("coordinate", s.coordinate())
+          .text("value", s.value())
+          .number("growth_rate_change_per_s_per_mm", s.growthPerMillimetre())
+          .number("frequency_change_hz_per_mm", s.frequencyPerMillimetre())
+          .number("linear_range_mm", s.linearRange())
+          .endObject();
+    }
+    json.endArray();
+  }
+
   private static void modes(JsonWriter json, String key, List<ModeEntry> modes) {
     json.array(key);
     for (ModeEntry entry : modes) {
@@ -118,6 +135,7 @@ public final class ModesJson {
         json.endArray().number("growth_budget_remainder_per_s", budget.remainder());
       }
       sensitivities(json, entry.sensitivities());
+      points(json, entry.points());
       json.endObject();
     }
     json.endArray();

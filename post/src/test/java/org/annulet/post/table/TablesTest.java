@@ -149,4 +149,20 @@ class TablesTest {
     assertThat(new ModeEntry(first.view(), first.label(), Optional.empty()).stability())
         .isEqualTo(ModeEntry.Stability.GROWS);
   }
+
+  /** Percent and millimetre are never in one table: each has its own file and its own columns. */
+  @Test
+  void pointsOfAnOutline_standPerMillimetreInATableOfTheirOwn() {
+    String points = PointsCsv.text(results);
+    assertThat(points.lines().findFirst().orElseThrow())
+        .isEqualTo(
+            "mode,frequency_hz,growth_rate_per_s,rank,key,point,coordinate,value,"
+                + "growth_rate_change_per_s_per_mm,frequency_change_hz_per_mm,linear_range_mm");
+    assertThat(points.lines().skip(1))
+        .hasSize(results.modes().size())
+        .allMatch(l -> l.endsWith(",1,geometry.points.corner.2,corner,r,180 mm,-0.4,-0.3,12.0"));
+    assertThat(SensitivitiesCsv.text(results)).doesNotContain("geometry.points");
+    assertThat(ModesJson.text(results))
+        .contains("\"point_sensitivities\"", "\"growth_rate_change_per_s_per_mm\": -0.4");
+  }
 }
