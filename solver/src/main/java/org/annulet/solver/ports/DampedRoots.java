@@ -9,16 +9,10 @@ import org.apache.commons.math3.complex.Complex;
 /**
  * The eigenvalues of a chamber with dampers on some of its ports, at their true strength: the zeros
  * of g(s) = Π(s − s_i) · Π(s − π_k) · det(1 + diag(a) H), π_k the poles of the dampers. All are
- * found at once (Ehrlich 1967, Commun. ACM 10, 107; Aberth 1973, Math. Comp. 27, 339; both from
- * memory) and counted by the argument principle. Not thread-safe; cheap to make.
+ * found at once ({@link SimultaneousRoots}) and counted by the argument principle. Not thread-safe;
+ * cheap to make.
  */
 public final class DampedRoots {
-  /** A step below this share of |s| ends the iteration of a root. */
-  private static final double SETTLED = 1e-11;
-
-  /** Step aside from a pole of H, relative; its square is what it costs. */
-  private static final double ASIDE = 1e-7;
-
   private static final int STEPS = 80;
   private static final int ROUNDS = 4;
   private final PortTransfer transfer;
@@ -31,6 +25,7 @@ public final class DampedRoots {
   private final double[] ai;
   private final double[] br;
   private final double[] bi;
+  private final SimultaneousRoots iteration;
   private double strength = 1;
 
   /**
@@ -56,6 +51,7 @@ public final class DampedRoots {
     ai = new double[k * k];
     br = new double[k * k];
     bi = new double[k * k];
+    iteration = new SimultaneousRoots(this::rate, transfer.poles(), transfer.region());
     Window wide = transfer.region();
     for (AnalyticFunction f : flows) {
       damperPoles.addAll(
@@ -135,11 +131,11 @@ public final class DampedRoots {
     int steps = 12;
     for (int k = 1; k <= steps; k++) {
       strength = Math.pow((double) k / steps, 2);
-      points = step(points, STEPS, new boolean[points.size()]);
+      points = iteration.run(points, STEPS, new boolean[points.size()]);
     }
     strength = 1;
     boolean[] settled = new boolean[points.size()];
-    points = step(points, STEPS, settled);
+    points = iteration.run(points, STEPS, settled);
     Complex[][] out = new Complex[transfer.poles().size()][];
     int q = 0;
     for (int i = 0; i < out.length; i++) {
@@ -185,7 +181,7 @@ public final class DampedRoots {
   /** Those points that settled. */
   private List<Complex> iterate(List<Complex> start, int steps) {
     boolean[] settled = new boolean[start.size()];
-    List<Complex> points = step(start, steps, settled);
+    List<Complex> points = iteration.run(start, steps, settled);
     List<Complex> kept = new ArrayList<>();
     for (int k = 0; k < settled.length; k++) {
       if (settled[k]) {
@@ -193,82 +189,6 @@ public final class DampedRoots {
       }
     }
     return kept;
-  }
-
-  private List<Complex> step(List<Complex> start, int steps, boolean[] settled) {
-    int n = start.size();
-    double[] zr = new double[n];
-    double[] zi = new double[n];
-    for (int k = 0; k < n; k++) {
-      zr[k] = start.get(k).getReal();
-      zi[k] = start.get(k).getImaginary();
-    }
-    boolean[] lost = new boolean[n];
-    double[] rate = new double[2];
-    for (int it = 0; it < steps; it++) {
-      boolean moving = false;
-      for (int k = 0; k < n; k++) {
-        if (settled[k] || lost[k]) {
-          continue;
-        }
-        moving = true;
-        double size = Math.hypot(zr[k], zi[k]);
-        // On a mode the dampers do not see g is 0/0: the step is taken from a place beside it.
-        double aside = onPole(zr[k], zi[k], size) ? ASIDE * size : 0;
-        double fromR = zr[k] + 0.6 * aside;
-        double fromI = zi[k] + 0.8 * aside;
-        rate(fromR, fromI, rate);
-        double plain = 1 / Math.hypot(rate[0], rate[1]); // Newton's own step: small at roots only
-        for (int j = 0; j < n; j++) {
-          if (j != k && !lost[j]) {
-            SideIntegral.subtractPole(rate, fromR - zr[j], fromI - zi[j]);
-          }
-        }
-        double norm = rate[0] * rate[0] + rate[1] * rate[1];
-        double dr = rate[0] / norm;
-        double di = -rate[1] / norm;
-        if (Double.isNaN(norm) || Double.isInfinite(norm)) {
-          settled[k] = !Double.isNaN(norm);
-          lost[k] = !settled[k];
-          continue;
-        }
-        double cut = Math.min(1, 0.1 * size / Math.hypot(dr, di));
-        fromR -= cut * dr;
-        fromI -= cut * di;
-        double length = Math.hypot(fromR - zr[k], fromI - zi[k]);
-        zr[k] = fromR;
-        zi[k] = fromI;
-        settled[k] = length < (aside > 0 ? 10 : 1) * SETTLED * size && plain < 10 * ASIDE * size;
-        lost[k] = far(zr[k], zi[k]);
-      }
-      if (!moving) {
-        break;
-      }
-    }
-    List<Complex> out = new ArrayList<>();
-    for (int k = 0; k < n; k++) {
-      out.add(lost[k] ? Complex.NaN : new Complex(zr[k], zi[k]));
-    }
-    return out;
-  }
-
-  private boolean onPole(double re, double im, double size) {
-    for (PortPole pole : transfer.poles()) {
-      if (Math.hypot(re - pole.s().getReal(), im - pole.s().getImaginary()) < 0.1 * ASIDE * size) {
-        return true;
-      }
-    }
-    return false;
-  }
-
-  private boolean far(double re, double im) {
-    Window r = transfer.region();
-    double width = r.highestGrowth() - r.lowestGrowth();
-    double omega = im / (2 * Math.PI);
-    return re < r.lowestGrowth() - width
-        || re > r.highestGrowth() + width
-        || omega < 0.3 * r.lowestFrequency()
-        || omega > 1.6 * r.highestFrequency();
   }
 
   private boolean inFrequency(Complex s) {
