@@ -32,6 +32,7 @@ import picocli.CommandLine.UnmatchedArgumentException;
       MeshVerb.class,
       ModesVerb.class,
       SweepVerb.class,
+      UncertaintyVerb.class,
       DampersVerb.class,
       MergeVerb.class,
       VerifyVerb.class

@@ -1,5 +1,6 @@
 package org.annulet.cases.cli;
 
+import java.nio.file.Path;
 import org.annulet.cases.points.Slice;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
@@ -17,6 +18,20 @@ abstract class PointsVerb extends Verb {
 
   Slice part() {
     return part == null ? Slice.WHOLE : part;
+  }
+
+  /** What to say when a part is computed. */
+  ExitStatus partDone(Path folder) {
+    console()
+        .result(
+            "Part "
+                + part().number()
+                + " of "
+                + part().of()
+                + " is in "
+                + folder
+                + "; when all are there: annulet merge CASE");
+    return ExitStatus.DONE;
   }
 
   /** Reads {@code 2/8}. */

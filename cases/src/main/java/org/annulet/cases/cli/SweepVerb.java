@@ -16,19 +16,7 @@ final class SweepVerb extends PointsVerb {
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
     SweepStudy study = new SweepStudy(caseFile, Version.text(), console().progress());
     study.compute(folder, part());
-    if (!part().isWhole()) {
-      console()
-          .result(
-              "Part "
-                  + part().number()
-                  + " of "
-                  + part().of()
-                  + " is in "
-                  + folder
-                  + "; when all are there: annulet merge CASE");
-      return ExitStatus.DONE;
-    }
-    return finish(study, folder, console());
+    return part().isWhole() ? finish(study, folder, console()) : partDone(folder);
   }
 
   static ExitStatus finish(SweepStudy study, Path folder, Console console) throws IOException {

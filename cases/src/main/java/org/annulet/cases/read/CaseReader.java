@@ -156,7 +156,10 @@ public final class CaseReader {
     Studies studies =
         geometry.isPresent()
             ? m.get("studies")
-                .map(new StudiesReader(shape, dampers, window)::read)
+                .map(
+                    new StudiesReader(
+                            shape, dampers, flames.stream().map(Flame::name).toList(), window)
+                        ::read)
                 .orElse(Studies.NONE)
             : Studies.NONE;
     CaseFile.Outputs outputs =

@@ -7,8 +7,10 @@ import java.util.Optional;
  *
  * @param dampers the dampers to be placed; empty when none are asked for
  * @param sweep what is to be varied; empty when nothing is
+ * @param uncertainty inputs that are not known exactly; empty when none is named
  */
-public record Studies(Optional<DamperSearch> dampers, Optional<Sweep> sweep) {
+public record Studies(
+    Optional<DamperSearch> dampers, Optional<Sweep> sweep, Optional<Uncertainty> uncertainty) {
   /** No study. */
-  static final Studies NONE = new Studies(Optional.empty(), Optional.empty());
+  static final Studies NONE = new Studies(Optional.empty(), Optional.empty(), Optional.empty());
 }

@@ -12,9 +12,12 @@ final class StudiesReader {
 
   private final Geometry geometry;
   private final List<Damper> dampers;
+  private final List<String> flames;
   private final Optional<WindowReader> window;
 
-  StudiesReader(Geometry geometry, List<Damper> dampers, Optional<WindowReader> window) {
+  StudiesReader(
+      Geometry geometry, List<Damper> dampers, List<String> flames, Optional<WindowReader> window) {
+    this.flames = flames;
     this.geometry = geometry;
     this.dampers = dampers;
     this.window = window;
@@ -23,7 +26,9 @@ final class StudiesReader {
   Studies read(Entry entry) {
     Mapping m = Mapping.of(entry, CaseKeys.STUDIES);
     return new Studies(
-        m.get("dampers").flatMap(this::dampers), m.get("sweep").flatMap(SweepReader::read));
+        m.get("dampers").flatMap(this::dampers),
+        m.get("sweep").flatMap(SweepReader::read),
+        m.get("uncertainty").flatMap(new UncertaintyReader(geometry, flames)::read));
   }
 
   private Optional<DamperSearch> dampers(Entry entry) {

@@ -73,7 +73,7 @@ public record CaseProblem(ChamberShape shape, Medium medium, List<Part> parts, S
   }
 
   /** The same without use of a ring's symmetry. */
-  static CaseProblem whole(CaseFile caseFile, ChamberShape shape) {
+  public static CaseProblem whole(CaseFile caseFile, ChamberShape shape) {
     return whole(caseFile, new CaseMemory(caseFile, shape));
   }
 

@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
 import java.util.function.DoubleFunction;
+import org.annulet.cases.points.ModeLinks;
 import org.annulet.cases.study.PointMode;
 import org.annulet.cases.study.PointModes;
 import org.annulet.solver.modes.Window;

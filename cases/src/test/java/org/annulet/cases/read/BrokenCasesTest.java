@@ -177,6 +177,42 @@ class BrokenCasesTest {
             "add"),
         ring(
             "walls:",
+            "studies: {uncertainty: {inputs: {gas.mean_pressure: {gaussian: 2 %}}}}\nwalls:",
+            18,
+            "unknown key 'gaussian'",
+            "normal"),
+        ring(
+            "walls:",
+            "studies: {uncertainty: {inputs: {gas.mean_pressure: {normal: 2 %, uniform: 1 %}}}}\nwalls:",
+            18,
+            "these keys exclude each other: normal, uniform",
+            "keep one"),
+        ring(
+            "walls:",
+            "studies: {uncertainty: {seed: 3}}\nwalls:",
+            18,
+            "nothing is uncertain",
+            "burner_scatter"),
+        ring(
+            "walls:",
+            "studies: {uncertainty: {inputs: {a: {normal: 1 %}, b: {normal: 1 %}}, correlated: [{between: [a, b], coefficient: 1}]}}\nwalls:",
+            18,
+            "the coefficient must lie between",
+            "0.5"),
+        ring(
+            "walls:",
+            "studies: {uncertainty: {inputs: {a: {normal: 1 %}}, correlated: [{between: [a, c], coefficient: 0.2}]}}\nwalls:",
+            18,
+            "no input 'c'",
+            "known: a"),
+        ring(
+            "walls:",
+            "studies: {uncertainty: {burner_scatter: {pilot: {gain: {normal: 1 %}}}}}\nwalls:",
+            18,
+            "no flame 'pilot'",
+            "main"),
+        ring(
+            "walls:",
             "studies: {sweep: {along: {set: {}}}}\nwalls:",
             18,
             "nothing is set on this axis",

@@ -186,6 +186,25 @@ public final class FlameScatter {
     throw new IllegalArgumentException("there is no pole " + pole);
   }
 
+  /** ds/dρ of an eigenvalue, ρ the same at all burners. */
+  public Complex slope(int pole) {
+    int q = number(pole);
+    int c = 0;
+    while (cells.get(c).number() != q) {
+      c++;
+    }
+    Complex s = poles.get(pole).s();
+    Complex residue = Complex.ZERO;
+    double[] out = new double[4];
+    for (int k = 0; k < 8; k++) {
+      double turn = Math.PI * (k + 0.5) / 4;
+      Complex d = new Complex(Math.cos(turn), Math.sin(turn)).multiply(1e-4 * s.abs());
+      transfer[c].at(s.getReal() + d.getReal(), s.getImaginary() + d.getImaginary(), out);
+      residue = residue.add(d.multiply(new Complex(out[0], out[1])));
+    }
+    return residue.divide(-8);
+  }
+
   /**
    * The eigenvalues with scatter.
    *

@@ -1,4 +1,4 @@
-package org.annulet.cases.sweep;
+package org.annulet.cases.points;
 
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -9,7 +9,7 @@ import org.annulet.cases.study.PointMode;
 import org.annulet.cases.study.PointModes;
 
 /** Which mode of one point becomes which of the next. */
-final class ModeLinks {
+public final class ModeLinks {
   /** |Δs|/|s| that weighs as much as fields without likeness. */
   private static final double REACH = 0.05;
 
@@ -24,8 +24,13 @@ final class ModeLinks {
 
   private ModeLinks() {}
 
-  /** Where the modes go, and whether every step of the way was clear. */
-  record Linked(int[] to, boolean clear) {}
+  /**
+   * Where the modes go.
+   *
+   * @param to position in the second place of each mode of the first; −1 where it ends
+   * @param clear whether every step of the way was without a rival
+   */
+  public record Linked(int[] to, boolean clear) {}
 
   private record Pair(int i, int j, double cost) {}
 
@@ -34,12 +39,17 @@ final class ModeLinks {
    *
    * @param between solves a place between the two
    */
-  static Linked follow(Place from, Place to, DoubleFunction<PointModes> between) {
+  public static Linked follow(Place from, Place to, DoubleFunction<PointModes> between) {
     return follow(from, to, between, DEEPEST);
   }
 
-  /** Modes at a place of the sweep. */
-  record Place(double at, PointModes modes) {}
+  /**
+   * Modes at a place of a way.
+   *
+   * @param at how far along the way
+   * @param modes there
+   */
+  public record Place(double at, PointModes modes) {}
 
   private static Linked follow(
       Place from, Place to, DoubleFunction<PointModes> between, int deeper) {
@@ -58,7 +68,8 @@ final class ModeLinks {
     return new Linked(map, first.clear && second.clear);
   }
 
-  static double cost(PointMode a, PointMode b) {
+  /** What it costs to join two modes: 0 for the same one. */
+  public static double cost(PointMode a, PointMode b) {
     return a.s().subtract(b.s()).abs() / (REACH * a.s().abs()) + 1 - a.likeness(b);
   }
 

@@ -1,4 +1,4 @@
-package org.annulet.cases.sweep;
+package org.annulet.cases.points;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
@@ -90,22 +90,5 @@ class ModeLinksTest {
         };
 
     assertThat(follow(f, 0, 1)).containsExactly(1);
-  }
-
-  @Test
-  void lines_readBackToTheLastBit() {
-    PointModesText text = new PointModesText();
-    PointModes modes =
-        new PointModes(
-            List.of(
-                mode("Bloch number 3", -1.0 / 3, 1234.567890123, 0.3, -0.7, 1e-9),
-                mode("", 2.5e-11, 99, 1, 2, 3)),
-            false);
-
-    String line = text.line(modes);
-
-    assertThat(text.line(text.parse(line))).isEqualTo(line);
-    assertThat(text.parse(line).modes().get(0).s()).isEqualTo(modes.modes().get(0).s());
-    assertThat(text.parse(line).complete()).isFalse();
   }
 }
