@@ -5,6 +5,7 @@ import java.nio.file.Path;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.study.DamperFiles;
 import org.annulet.cases.study.DamperStudy;
+import org.annulet.post.files.WholeFile;
 import picocli.CommandLine.Command;
 
 /** {@code annulet dampers CASE}. */
@@ -14,6 +15,7 @@ import picocli.CommandLine.Command;
 final class DampersVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
+    WholeFile.prepare(folder);
     DamperStudy.Result result = new DamperStudy(caseFile, console().progress()).run();
     DamperFiles.write(folder, result, Version.text());
     console().result(DamperFiles.terminal(result));

@@ -117,11 +117,14 @@ public final class Main implements Runnable {
               + file.getFile()
               + ": "
               + reason
-              + "\n    mend: give a folder that can be written with --out");
+              + "\n    mend: make room, or give a folder that can be written with --out");
       return ExitStatus.OUT_OF_RESOURCES;
     }
     if (e instanceof IOException) {
-      console.fault("annulet: " + e.getMessage());
+      console.fault(
+          "annulet: "
+              + e.getMessage()
+              + "\n    mend: make room, or give another folder with --out");
       return ExitStatus.OUT_OF_RESOURCES;
     }
     console.fault(

@@ -4,6 +4,7 @@ import java.io.IOException;
 import java.nio.file.Path;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.study.MeshFiles;
+import org.annulet.post.files.WholeFile;
 import picocli.CommandLine.Command;
 
 /** {@code annulet mesh CASE}. */
@@ -11,6 +12,7 @@ import picocli.CommandLine.Command;
 final class MeshVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
+    WholeFile.prepare(folder);
     console().result(MeshFiles.write(caseFile, folder));
     console().result("Written to " + folder);
     return ExitStatus.DONE;

@@ -7,6 +7,7 @@ import java.util.Map;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.study.ModesFiles;
 import org.annulet.cases.study.ModesStudy;
+import org.annulet.post.files.WholeFile;
 import org.annulet.post.meaning.Results;
 import org.annulet.post.table.TextTables;
 import org.annulet.post.table.VariantTable;
@@ -19,6 +20,7 @@ import picocli.CommandLine.Command;
 final class ModesVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
+    WholeFile.prepare(folder);
     if (caseFile.variants().isEmpty()) {
       return one(caseFile, folder).results().complete()
           ? ExitStatus.DONE

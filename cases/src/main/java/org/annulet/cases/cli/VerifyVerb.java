@@ -5,6 +5,7 @@ import java.nio.file.Path;
 import org.annulet.cases.book.Book;
 import org.annulet.cases.book.BookFiles;
 import org.annulet.cases.book.Solved;
+import org.annulet.post.files.WholeFile;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Option;
 
@@ -22,6 +23,9 @@ final class VerifyVerb extends Speaker {
 
   @Override
   public Integer call() throws IOException {
+    if (out != null) {
+      WholeFile.prepare(out);
+    }
     Solved book = Solved.of(Book.shipped(), console().progress(), Version.text());
     console().result(BookFiles.terminal(book));
     if (out != null) {

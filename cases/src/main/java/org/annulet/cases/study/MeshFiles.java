@@ -1,7 +1,6 @@
 package org.annulet.cases.study;
 
 import java.io.IOException;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
@@ -54,9 +53,8 @@ public final class MeshFiles {
               quality.pointsPerWavelength(mesh.zoneNames().get(z), slowest, top)));
     }
     MeshCheck.of(mesh).forEach(f -> report.append("check: ").append(f).append('\n'));
-    Files.createDirectories(folder);
     PlaneView view = PlaneView.of(GasVolume.kind(shape.geometry()));
-    GmshWriter.write(mesh, folder.resolve("mesh.msh"));
+    WholeFile.write(folder.resolve("mesh.msh"), part -> GmshWriter.write(mesh, part));
     vtu(mesh).write(folder.resolve("mesh.vtu"));
     WholeFile.write(folder.resolve("mesh.svg"), MeshPicture.svg(mesh, view));
     WholeFile.write(
