@@ -7,6 +7,7 @@ import java.util.Map;
 import java.util.Set;
 import java.util.TreeSet;
 import org.annulet.mesher.mesh.Mesh;
+import org.annulet.mesher.mesh.MeshCheck;
 import org.locationtech.jts.geom.Coordinate;
 import org.locationtech.jts.geom.Envelope;
 import org.locationtech.jts.index.kdtree.KdNode;
@@ -83,7 +84,16 @@ final class Assembly {
       }
     }
     try {
-      return builder.build();
+      Mesh mesh = builder.build();
+      List<MeshCheck.Finding> findings = MeshCheck.tiling(mesh);
+      if (findings.isEmpty()) {
+        return mesh;
+      }
+      throw file.fault(
+          "the triangles do not cover the gas once: "
+              + findings.get(0)
+              + (findings.size() > 1 ? " and " + (findings.size() - 1) + " more" : ""),
+          "remove folded, flat or overlapping triangles: mesh the drawing again");
     } catch (IllegalStateException e) {
       throw file.fault(
           "the triangles do not fit together: " + e.getMessage(),

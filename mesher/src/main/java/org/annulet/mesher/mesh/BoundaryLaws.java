@@ -2,6 +2,7 @@ package org.annulet.mesher.mesh;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.BiPredicate;
 import org.annulet.mesher.mesh.MeshCheck.Finding;
 import org.annulet.mesher.mesh.MeshCheck.Law;
 import org.annulet.mesher.mesh.MeshMeasures.Sum;
@@ -39,17 +40,18 @@ final class BoundaryLaws {
 
   void check() {
     named();
-    boolean[] onBoundary = new boolean[mesh.nodeCount()];
-    for (int e : boundary) {
-      onBoundary[mesh.segmentStart(e)] = true;
-      onBoundary[mesh.segmentEnd(e)] = true;
-    }
-    angleSums(onBoundary);
-    contacts();
+    angleSums();
+    contacts(BoundaryLaws::touch, "touch or cross");
     if (findings.stream().noneMatch(f -> f.law() == Law.NAMED_BOUNDARY)) {
       new BoundaryLoops(mesh, sides, findings).check();
     }
     divergence();
+  }
+
+  /** That the triangles cover their domain once; parts of the boundary may lie on one another. */
+  void tiling() {
+    angleSums();
+    contacts(BoundaryLaws::cross, "cross");
   }
 
   private void named() {
@@ -78,7 +80,12 @@ final class BoundaryLaws {
     return false;
   }
 
-  private void angleSums(boolean[] onBoundary) {
+  private void angleSums() {
+    boolean[] onBoundary = new boolean[mesh.nodeCount()];
+    for (int e : boundary) {
+      onBoundary[mesh.segmentStart(e)] = true;
+      onBoundary[mesh.segmentEnd(e)] = true;
+    }
     double[] sum = new double[mesh.nodeCount()];
     for (int t = 0; t < mesh.triangleCount(); t++) {
       for (int k = 0; k < 3; k++) {
@@ -103,8 +110,8 @@ final class BoundaryLaws {
     }
   }
 
-  /** Boundary sides that touch or cross one another anywhere but in a common node. */
-  private void contacts() {
+  /** Boundary sides that meet in this way anywhere but in a common node. */
+  private void contacts(BiPredicate<Coordinate[], Coordinate[]> meet, String word) {
     STRtree tree = new STRtree();
     for (int e : boundary) {
       tree.insert(box(ends(e, 0)), e);
@@ -115,8 +122,8 @@ final class BoundaryLaws {
         Coordinate[] p = ends(e, shift);
         for (Object hit : tree.query(box(p))) {
           int f = (Integer) hit;
-          if ((f > e || shift != 0) && !haveCommonNode(e, f) && touch(p, ends(f, 0))) {
-            String what = "sides of '" + edge(e) + "' and '" + edge(f) + "' touch or cross";
+          if ((f > e || shift != 0) && !haveCommonNode(e, f) && meet.test(p, ends(f, 0))) {
+            String what = "sides of '" + edge(e) + "' and '" + edge(f) + "' " + word;
             findings.add(at(Law.CONFORMING, what, mesh.segmentStart(e)));
           }
         }
@@ -139,6 +146,11 @@ final class BoundaryLaws {
     }
     return Orientation.index(p[0], p[1], q[0]) * Orientation.index(p[0], p[1], q[1]) <= 0
         && Orientation.index(q[0], q[1], p[0]) * Orientation.index(q[0], q[1], p[1]) <= 0;
+  }
+
+  private static boolean cross(Coordinate[] p, Coordinate[] q) {
+    return Orientation.index(p[0], p[1], q[0]) * Orientation.index(p[0], p[1], q[1]) < 0
+        && Orientation.index(q[0], q[1], p[0]) * Orientation.index(q[0], q[1], p[1]) < 0;
   }
 
   private static Envelope box(Coordinate[] p) {

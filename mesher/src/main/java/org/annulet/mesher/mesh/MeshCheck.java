@@ -93,6 +93,18 @@ public final class MeshCheck {
   }
 
   /**
+   * What any mesh must obey to be computed on: triangles clear of rounding that cover their domain
+   * once. Laxer than {@link #of}: walls without thickness, whose two sides lie on one another,
+   * pass.
+   */
+  public static List<Finding> tiling(Mesh mesh) {
+    List<Finding> findings = new ArrayList<>();
+    positiveArea(mesh, findings);
+    new BoundaryLaws(mesh, findings).tiling();
+    return findings;
+  }
+
+  /**
    * The Delaunay property on sides without a name: the two angles facing a side add up to no more
    * than π. A mesh that was refined, moved or drawn by hand need not have it.
    */

@@ -247,6 +247,52 @@ class GmshFilesTest {
     assertThat(MeshMeasures.area(mesh)).isCloseTo(0.2, within(1e-15)); // by the shoelace formula
   }
 
+  /** Four triangles about an inner node that was moved out of the square, or onto its side. */
+  @Test
+  void foldedAndFlatTriangles_areRefused() throws IOException {
+    String square =
+        """
+        $MeshFormat
+        2.2 0 8
+        $EndMeshFormat
+        $PhysicalNames
+        2
+        1 1 "wall"
+        2 2 "gas"
+        $EndPhysicalNames
+        $Nodes
+        5
+        1 0 0 0
+        2 1 0 0
+        3 1 1 0
+        4 0 1 0
+        5 %s 0.5 0
+        $EndNodes
+        $Elements
+        8
+        1 1 2 1 1 1 2
+        2 1 2 1 1 2 3
+        3 1 2 1 1 3 4
+        4 1 2 1 1 4 1
+        5 2 2 2 1 1 2 5
+        6 2 2 2 1 2 3 5
+        7 2 2 2 1 3 4 5
+        8 2 2 2 1 4 1 5
+        $EndElements
+        """;
+    assertRefused(
+        String.format(square, "1.5"), "do not fit together", "two triangles on the same hand");
+    assertRefused(
+        String.format(square, "0.9999999999999"),
+        "do not cover the gas once",
+        "triangle 1 encloses",
+        "mesh the drawing again");
+    Files.writeString(dir.resolve("good.msh"), String.format(square, "0.7"));
+    assertThat(
+            MeshMeasures.area(GmshReader.read(dir.resolve("good.msh"), ImportOptions.standard())))
+        .isCloseTo(1, within(1e-15));
+  }
+
   @Test
   void hugeCountsAndNaN_areRefusedWithLine() throws IOException {
     String head = "$MeshFormat\n2.2 0 8\n$EndMeshFormat\n$Nodes\n";
