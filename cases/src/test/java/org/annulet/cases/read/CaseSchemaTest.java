@@ -58,15 +58,15 @@ class CaseSchemaTest {
 
   @Test
   void whatTheReaderAccepts_fitsTheSchema() {
-    assertThat(errors(BrokenCasesTest.RING)).isEmpty();
-    assertThat(errors(BrokenCasesTest.SECTION)).isEmpty();
+    assertThat(errors(Spoilt.RING)).isEmpty();
+    assertThat(errors(Spoilt.SECTION)).isEmpty();
     for (String example : ReadingCasesTest.accepted()) {
       assertThat(errors(example)).as(example).isEmpty();
     }
   }
 
   /** Unknown or missing keys and wrong words are seen by the schema too. */
-  static Stream<BrokenCasesTest.Spoilt> faultsOfForm() {
+  static Stream<Spoilt> faultsOfForm() {
     return BrokenCasesTest.spoilt()
         .filter(
             s ->
@@ -79,7 +79,7 @@ class CaseSchemaTest {
 
   @ParameterizedTest
   @MethodSource("faultsOfForm")
-  void faultOfForm_isSeenByTheSchema(BrokenCasesTest.Spoilt s) {
+  void faultOfForm_isSeenByTheSchema(Spoilt s) {
     assertThat(errors(s.base().replace(s.old(), s.by()))).isNotEmpty();
   }
 

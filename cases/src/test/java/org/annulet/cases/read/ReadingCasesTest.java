@@ -136,7 +136,7 @@ class ReadingCasesTest {
 
   @Test
   void staging_laterExceptionsWin() throws IOException {
-    CaseFile c = read(BrokenCasesTest.RING);
+    CaseFile c = read(Spoilt.RING);
     Flame f = c.flames().get(0);
     assertThat(f.responseAt(1)).isEqualTo(new Flame.GainDelay(0.5, 2.1e-3));
     assertThat(f.responseAt(2)).isEqualTo(new Flame.GainDelay(0.7, 2.4e-3));
@@ -194,7 +194,7 @@ class ReadingCasesTest {
 
   @Test
   void changes_replaceValuesByPath() throws IOException {
-    Path file = Files.writeString(folder.resolve("case.yaml"), BrokenCasesTest.RING);
+    Path file = Files.writeString(folder.resolve("case.yaml"), Spoilt.RING);
     CaseFile c =
         CaseReader.read(
                 file,
@@ -215,7 +215,7 @@ class ReadingCasesTest {
 
   @Test
   void echo_showsEveryDimensionalValueInSiBesideItsText() throws IOException {
-    CaseFile c = read(BrokenCasesTest.SECTION);
+    CaseFile c = read(Spoilt.SECTION);
     assertThat(c.echo())
         .anySatisfy(l -> assertThat(l).matches("  gas.zones.tubes.temperature +20 °C += 293.15 K"))
         .anySatisfy(l -> assertThat(l).matches("  geometry.points.g.1 +350 mm += 0.35 m"))

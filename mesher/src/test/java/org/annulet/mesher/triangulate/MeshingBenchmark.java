@@ -22,7 +22,7 @@ public final class MeshingBenchmark {
             // From h at the flame to 8 h at 0.2 m from it, as the other program's threshold field.
             ? Sizing.builder(8 * h).edge("flame", h).growth(35 * h).cornerShare(1).build()
             : Sizing.builder(h).cornerShare(1).build();
-    Mesh m = OutlineMesher.mesh(Gallery.annularChamber(), sizing);
+    Mesh m = OutlineMesher.mesh(Chambers.annularChamber(), sizing);
     double least = 180;
     for (int t = 0; t < m.triangleCount(); t++) {
       least = Math.min(least, GalleryTest.leastAngle(m, t));
