@@ -36,8 +36,7 @@ final class CaseTwoPorts {
     }
   }
 
-  private static org.annulet.solver.boundary.TwoPort solved(
-      TwoPort port, Mesh mesh, Medium medium) {
+  static org.annulet.solver.boundary.TwoPort solved(TwoPort port, Mesh mesh, Medium medium) {
     if (port.special().isEmpty()) {
       return loss(port, density(port, mesh, medium));
     }

@@ -61,7 +61,7 @@ final class CaseWalls {
     return name.substring(0, name.length() - ending.length());
   }
 
-  private static org.annulet.solver.boundary.Wall solverWall(CaseFile caseFile, Wall wall) {
+  static org.annulet.solver.boundary.Wall solverWall(CaseFile caseFile, Wall wall) {
     if (wall instanceof Wall.Open) {
       return new OpenEnd();
     }

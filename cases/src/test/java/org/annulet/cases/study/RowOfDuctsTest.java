@@ -1,0 +1,122 @@
+package org.annulet.cases.study;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
+
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import org.annulet.cases.read.CaseFile;
+import org.annulet.cases.read.CaseReader;
+import org.annulet.post.meaning.ModeEntry;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+/** The row of ducts a case becomes, against the finite elements of the same case. */
+class RowOfDuctsTest {
+  private static final String DUCT =
+      """
+      annulet: 1
+      title: straight duct of two gases with flame, loss and lossy end
+      geometry:
+        kind: plane
+        depth: 100 mm
+        mesh_size: 10 mm
+        points: {a: [0, 0, mm], b: [300, 0, mm], c: [1000, 0, mm], d: [1000, 20, mm], e: [300, 20, mm], f: [0, 20, mm]}
+        edges:
+          roof: {line: [e, f]}
+          inlet: {line: [f, a]}
+          floor: {line: [a, b]}
+          sheet: {line: [b, e]}
+          below: {line: [b, c]}
+          outlet: {line: [c, d]}
+          above: {line: [d, e]}
+        zones:
+          up: {boundary: [roof, inlet, floor, sheet]}
+          down: {boundary: [below, outlet, above, sheet]}
+      gas:
+        mean_pressure: 1 bar
+        zones:
+          up: {temperature: 300 K, gamma: 1.4, gas_constant: 287 J/(kg K)}
+          down: {temperature: 1500 K, gamma: 1.3, gas_constant: 290 J/(kg K)}
+      walls: {outlet: {impedance: [3, 1]}, roof: {admittance: 0.01}}
+      two_ports: {sheet: {loss_coefficient: 2, velocity: 10 m/s, flow_from: up}}
+      flames:
+        main:
+          heat_release: 800 W
+          place: {sheet: sheet}
+          reference: {edge: sheet, flow_from: up}
+          reference_velocity: 1 m/s
+          response: {gain: 0.4, delay: 3 ms}
+      window: {frequency: [30 Hz, 900 Hz], growth_rate: [-400, 400, 1/s]}
+      """;
+
+  @TempDir private Path folder;
+
+  private CaseFile read(String text) throws Exception {
+    return CaseReader.read(Files.writeString(folder.resolve("case.yaml"), text)).orThrow();
+  }
+
+  private static List<ModeEntry> modes(CaseFile c) {
+    return new ModesStudy(c, Progress.SILENT).modesOnly().run("test").results().modes();
+  }
+
+  @Test
+  void straightDuct_agreesWithTheFiniteElementsWithinTheirErrorBars() throws Exception {
+    CaseFile c = read(DUCT);
+
+    RowOfDucts.Answer row = RowOfDucts.of(c);
+    List<ModeEntry> modes = modes(c);
+
+    assertThat(row.reason()).isEmpty();
+    assertThat(row.complete()).isTrue();
+    assertThat(row.leftOut()).isEmpty();
+    assertThat(row.modes()).hasSameSizeAs(modes).hasSizeGreaterThan(2);
+    for (int i = 0; i < modes.size(); i++) {
+      var view = modes.get(i).view();
+      double f = row.modes().get(i).s().getImaginary() / (2 * Math.PI);
+      assertThat(view.mode().frequency()).isCloseTo(f, within(view.frequencyError() + 1e-6));
+      assertThat(view.mode().growthRate())
+          .isCloseTo(row.modes().get(i).s().getReal(), within(view.growthError() + 1e-6));
+    }
+  }
+
+  @Test
+  void shippedRing_hasTheSameModes_wherePlaneAndAzimuthalWavesCarryThem() throws Exception {
+    String text = Files.readString(Path.of("hydrogen-ring/case.yaml"));
+    CaseFile c =
+        read(
+            text.replace("mesh_size: 12 mm", "mesh_size: 30 mm")
+                .replace("burners: 6 mm", "burners: 12 mm"));
+
+    RowOfDucts.Answer row = RowOfDucts.of(c);
+    List<ModeEntry> modes = modes(c);
+
+    assertThat(row.complete()).isTrue();
+    assertThat(row.leftOut()).anyMatch(l -> l.contains("jump of area"));
+    int together = row.modes().stream().mapToInt(RowOfDucts.RowMode::copies).sum();
+    assertThat(together).isEqualTo(modes.size());
+    for (ModeEntry m : modes) {
+      double f = m.view().mode().frequency();
+      double g = m.view().mode().growthRate();
+      double nearest =
+          row.modes().stream()
+              .mapToDouble(
+                  r ->
+                      Math.hypot(
+                          r.s().getImaginary() / (2 * Math.PI) - f, (r.s().getReal() - g) / 20))
+              .min()
+              .orElseThrow();
+      // what the end corrections of 14 ducts of 52 mm in annuli of 80 and 115 mm cost
+      assertThat(nearest).isLessThan(0.02 * f);
+    }
+  }
+
+  @Test
+  void bentSection_isNoRow_andSaysWhy() throws Exception {
+    RowOfDucts.Answer row = RowOfDucts.of(CaseReader.read(Path.of("reverse-flow")).orThrow());
+
+    assertThat(row.modes()).isEmpty();
+    assertThat(row.reason()).contains("zone").contains("no row of ducts");
+  }
+}
