@@ -65,11 +65,11 @@ public final class ModeFiles {
     for (Numbered mode : modes) {
       String name = String.format(Locale.ROOT, "%s-%02d.vtu", stem, mode.number());
       double[][] p = field(mode.view());
-      double[] magnitude = new double[p[0].length];
-      double[] phase = new double[p[0].length];
+      float[] magnitude = new float[p[0].length];
+      float[] phase = new float[p[0].length];
       for (int q = 0; q < phase.length; q++) {
-        magnitude[q] = Math.hypot(p[0][q], p[1][q]);
-        phase[q] = Math.toDegrees(Math.atan2(p[1][q], p[0][q]));
+        magnitude[q] = (float) Math.hypot(p[0][q], p[1][q]);
+        phase[q] = (float) Math.toDegrees(Math.atan2(p[1][q], p[0][q]));
       }
       VtuFile file =
           file(mode.view())
@@ -119,10 +119,10 @@ public final class ModeFiles {
     PvdFile.write(folder.resolve(stem + ".pvd"), members);
   }
 
-  private double[] atPoints(double[] atNodes) {
-    double[] out = new double[surface.pointCount()];
+  private float[] atPoints(double[] atNodes) {
+    float[] out = new float[surface.pointCount()];
     for (int q = 0; q < out.length; q++) {
-      out[q] = atNodes[surface.node(q)];
+      out[q] = (float) atNodes[surface.node(q)];
     }
     return out;
   }

@@ -18,6 +18,9 @@ import org.annulet.post.files.WholeFile;
  * thread-safe.
  */
 public final class VtuFile {
+  /** Binary digits kept of an array on triangles. */
+  private static final int STEPS = 18;
+
   private static final int BLOCK = 1 << 20;
   private static final byte TRIANGLE_CELL = 5;
   private static final byte LINE_CELL = 3;
@@ -90,6 +93,17 @@ public final class VtuFile {
   }
 
   /**
+   * Adds one number in single precision for each point.
+   *
+   * @param values shape [points of the surface]
+   */
+  public VtuFile points(String name, float[] values) {
+    check(name, values.length, surface.pointCount());
+    pointData.append(array("Float32", name, 1, bytes(values)));
+    return this;
+  }
+
+  /**
    * Adds one whole number for each triangle and line.
    *
    * @param values shape [triangles of the surface + lines]
@@ -112,16 +126,28 @@ public final class VtuFile {
   }
 
   /**
-   * Adds numbers in single precision for each triangle.
+   * Adds numbers in single precision for each triangle, in steps of 2⁻¹⁸ of the largest: what is
+   * constant on a triangle is not known better, and rounding noise would not shrink.
    *
    * @param values shape [triangles of the surface × components]
    */
   public VtuFile cells(String name, float[] values, int components) {
     check(name, values.length, surface.triangleCount() * components);
-    ByteBuffer b = ByteBuffer.allocate(4 * values.length).order(ByteOrder.LITTLE_ENDIAN);
-    b.asFloatBuffer().put(values);
-    cellData.append(array("Float32", name, components, b.array()));
+    cellData.append(array("Float32", name, components, bytes(stepped(values))));
     return this;
+  }
+
+  private static float[] stepped(float[] values) {
+    float largest = 0;
+    for (float x : values) {
+      largest = Math.max(largest, Math.abs(x));
+    }
+    double step = Math.scalb(1.0, Math.getExponent(largest) + 1 - STEPS);
+    float[] out = values.clone();
+    for (int i = 0; step > 0 && i < out.length; i++) {
+      out[i] = (float) (step * Math.rint(values[i] / step)) + 0f; // no negative zero
+    }
+    return out;
   }
 
   private static void check(String name, int got, int expected) {
@@ -218,6 +244,12 @@ public final class VtuFile {
     all.writeBytes(header.array());
     all.writeBytes(data.toByteArray());
     return all.toByteArray();
+  }
+
+  private static byte[] bytes(float[] values) {
+    ByteBuffer b = ByteBuffer.allocate(4 * values.length).order(ByteOrder.LITTLE_ENDIAN);
+    b.asFloatBuffer().put(values);
+    return b.array();
   }
 
   private static byte[] bytes(double[] values) {

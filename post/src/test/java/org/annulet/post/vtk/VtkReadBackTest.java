@@ -105,8 +105,8 @@ class VtkReadBackTest {
       assertThat(xyz[3 * p + 1]).isEqualTo(mesh.y(v));
       assertThat(re[p]).isEqualTo(view.re()[v]);
       assertThat(im[p]).isEqualTo(view.im()[v]);
-      assertThat(magnitude[p]).isEqualTo(Math.hypot(re[p], im[p]));
-      assertThat(phase[p]).isEqualTo(Math.toDegrees(Math.atan2(im[p], re[p])));
+      assertThat(magnitude[p]).isEqualTo((float) Math.hypot(re[p], im[p]));
+      assertThat(phase[p]).isEqualTo((float) Math.toDegrees(Math.atan2(im[p], re[p])));
     }
     double[] cells = numbers(got.get("cells"));
     double[] zone = numbers(got.get("zone"));
