@@ -49,8 +49,7 @@ final class Draws {
 
   /** Departures of sample i, in widths, shape [values]. */
   double[] sample(int i) {
-    SplittableRandom random =
-        new SplittableRandom(seed * 0x9E3779B97F4A7C15L + i * 0xD1B54A32D192ED03L);
+    SplittableRandom random = new SplittableRandom(mixed(mixed(seed) + i));
     double[] score = new double[shapes.size()];
     for (int k = 0; k < score.length; k++) {
       score[k] = NORMAL.inverseCumulativeProbability(random.nextDouble(0x1p-53, 1));
@@ -61,6 +60,18 @@ final class Draws {
       x[k] = departure(shapes.get(k), z[k]);
     }
     return x;
+  }
+
+  /**
+   * A number scattered over all 64 bits (finalizer of MurmurHash3, Appleby; constants from memory):
+   * without it streams of neighbouring seeds are one stream shifted by a draw, since the
+   * generator's own step is constant.
+   */
+  private static long mixed(long number) {
+    long z = number + 0x9E3779B97F4A7C15L;
+    z = (z ^ z >>> 33) * 0xFF51AFD7ED558CCDL;
+    z = (z ^ z >>> 33) * 0xC4CEB9FE1A85EC53L;
+    return z ^ z >>> 33;
   }
 
   private static double departure(Uncertainty.Shape shape, double score) {

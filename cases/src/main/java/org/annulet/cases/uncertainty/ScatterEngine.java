@@ -240,6 +240,7 @@ final class ScatterEngine implements Engine {
         continue;
       }
       for (Complex s : roots[p]) {
+        all &= !s.isNaN(); // it might have come into the window
         boolean grows =
             s.getReal() > 0 && w.contains(s.getReal(), s.getImaginary() / (2 * Math.PI));
         strangers += grows ? 1 : 0;

@@ -269,6 +269,20 @@ class UncertaintyStudyTest {
   }
 
   @Test
+  void seedsThatFollowEachOther_shareNoDraws() {
+    List<Shape> shapes = java.util.Collections.nCopies(3, Shape.NORMAL);
+    java.util.Set<Double> seen = new java.util.HashSet<>();
+    for (long seed = 0; seed < 4; seed++) {
+      for (int i = 0; i < 500; i++) {
+        for (double x : new Draws(seed, shapes, List.of()).sample(i)) {
+          seen.add(x);
+        }
+      }
+    }
+    assertThat(seen).hasSize(4 * 500 * 3);
+  }
+
+  @Test
   void inputsThatAreNoNumbers_andContradictions_areFaultsOfTheCase() throws Exception {
     assertThatThrownBy(() -> run(read("", "2 ms", "  inputs: {walls.outlet: {normal: 3 %}}")))
         .isInstanceOf(CaseFaultException.class)
