@@ -57,6 +57,10 @@ final class Mapping {
         Entry at = m.keyEntries.get(name);
         if (name.equals("<<")) {
           at.fault("merge keys (<<) are not part of YAML 1.2", "write the values out");
+        } else if (keys == CaseKeys.CASE && CaseKeys.STUDIES.all().contains(name)) {
+          at.fault(
+              "'" + name + "' is a study and stands under 'studies'",
+              "write 'studies: {" + name + ": …}'");
         } else if (CaseKeys.RESERVED.contains(name)) {
           at.fault("'" + name + "' is not supported in this version", "leave it out");
         } else if (name.matches("[0-9].*")) {

@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Optional;
 import org.apache.commons.math3.linear.SingularMatrixException;
 import org.apache.commons.math3.stat.StatUtils;
+import org.apache.commons.math3.stat.correlation.Covariance;
 import org.apache.commons.math3.stat.interval.ConfidenceInterval;
 import org.apache.commons.math3.stat.interval.WilsonScoreInterval;
 import org.apache.commons.math3.stat.regression.OLSMultipleLinearRegression;
@@ -127,7 +128,7 @@ record ModeStatistics(
     };
   }
 
-  /** Squared standardised regression coefficients, summed over each group; returns R². */
+  /** b_i Cov(x_i, σ)/Var σ, summed over each group; all of them add up to R², which is returned. */
   private static double shares(
       Engine engine, Drawn drawn, List<Integer> found, double[] growth, double[] shares) {
     Arrays.fill(shares, Double.NaN);
@@ -147,7 +148,7 @@ record ModeStatistics(
         for (int i = group.first(); i < group.first() + group.count(); i++) {
           int column = i;
           double[] own = Arrays.stream(x).mapToDouble(row -> row[column]).toArray();
-          shares[g] += b[i + 1] * b[i + 1] * StatUtils.variance(own) / total;
+          shares[g] += b[i + 1] * new Covariance().covariance(own, growth) / total;
         }
       }
       return regression.calculateRSquared();

@@ -161,6 +161,36 @@ class UncertaintyStudyTest {
   }
 
   @Test
+  void sharesOfCorrelatedInputs_addUpToWhatTheRegressionExplains() throws Exception {
+    UncertaintyStudy.Answer a =
+        run(
+            read(
+                ", inlet: {admittance: 0.02}",
+                "2 ms",
+                """
+                  samples: 100
+                  inputs:
+                    flames.main.response.gain: {normal: 0.02}
+                    walls.inlet.admittance: {uniform: 0.02}
+                  correlated:
+                    - {between: [flames.main.response.gain, walls.inlet.admittance], coefficient: 0.9}
+                """));
+
+    ModeStatistics m = a.modes().get(0);
+    // an identity of least squares: Var of the fit is the sum of b_i Cov(x_i, fit)
+    assertThat(m.shares()[0] + m.shares()[1]).isCloseTo(m.explained(), within(1e-9));
+  }
+
+  @Test
+  void uncertaintyOutsideStudies_isToldWhereItStands() throws Exception {
+    Path file = folder.resolve("case.yaml");
+    String study = "  inputs: {flames.main.response.gain: {normal: 3 %}}".indent(4);
+    Files.writeString(file, String.format(DUCT, "", "2 ms", study) + "uncertainty: {samples: 9}\n");
+    assertThatThrownBy(() -> CaseReader.read(file).orThrow())
+        .hasMessageContaining("'uncertainty' is a study and stands under 'studies'");
+  }
+
+  @Test
   void parts_areTheWholeByteForByte() throws Exception {
     CaseFile c =
         read("", "2 ms", "  samples: 30\n  inputs: {flames.main.response.delay: {normal: 5 %}}");
