@@ -83,7 +83,11 @@ public final class UncertaintyFiles {
   }
 
   private static String percent(double share) {
-    return Double.isNaN(share) ? "–" : Numbers.fixed(100 * share, 1);
+    if (Double.isNaN(share)) {
+      return "–";
+    }
+    boolean small = Math.min(share, 1 - share) > 1e-12 && Math.min(share, 1 - share) < 0.002;
+    return Numbers.fixed(100 * share, small ? 3 : 1);
   }
 
   private static List<String> sentences(UncertaintyStudy.Answer a) {

@@ -34,6 +34,11 @@ public final class FlameScatter {
   private static final int CHECKS = 12;
   private static final int STEPS = 60;
 
+  /** A root further from its pole than this share of the way to another is followed in steps. */
+  private static final double NEAR = 0.3;
+
+  private static final int PATH = 16;
+
   private final int burners;
   private final Window region;
   private final List<PortPole> poles;
@@ -216,19 +221,19 @@ public final class FlameScatter {
     if (ratios.size() != burners) {
       throw new IllegalArgumentException(ratios.size() + " ratios for " + burners + " burners");
     }
-    SimultaneousRoots iteration =
-        new SimultaneousRoots(new Determinant(ratios)::rate, poles, region);
-    List<Complex> points = new ArrayList<>();
-    for (PortPole pole : poles) {
-      for (int k = 0; k < pole.multiplicity(); k++) {
-        double turn = 0.7 + Math.PI * k;
-        points.add(
-            pole.s()
-                .add(new Complex(Math.cos(turn), Math.sin(turn)).multiply(1e-4 * pole.s().abs())));
+    Determinant determinant = new Determinant(ratios);
+    SimultaneousRoots iteration = new SimultaneousRoots(determinant::rate, poles, region);
+    List<Complex> start = startPoints();
+    boolean[] settled = new boolean[start.size()];
+    List<Complex> points = iteration.run(start, STEPS, settled);
+    if (strayed(points, settled)) {
+      points = start;
+      for (int k = 1; k <= PATH; k++) {
+        determinant.strength = (double) k / PATH;
+        settled = new boolean[start.size()];
+        points = iteration.run(points, STEPS, settled);
       }
     }
-    boolean[] settled = new boolean[points.size()];
-    points = iteration.run(points, STEPS, settled);
     Complex[][] out = new Complex[poles.size()][];
     int q = 0;
     for (int i = 0; i < out.length; i++) {
@@ -245,12 +250,49 @@ public final class FlameScatter {
     return out;
   }
 
+  private List<Complex> startPoints() {
+    List<Complex> points = new ArrayList<>();
+    for (PortPole pole : poles) {
+      for (int k = 0; k < pole.multiplicity(); k++) {
+        double turn = 0.7 + Math.PI * k;
+        points.add(
+            pole.s()
+                .add(new Complex(Math.cos(turn), Math.sin(turn)).multiply(1e-4 * pole.s().abs())));
+      }
+    }
+    return points;
+  }
+
+  /**
+   * Whether some root is lost or so far from where it began, compared with the other poles, that it
+   * may belong to another.
+   */
+  private boolean strayed(List<Complex> points, boolean[] settled) {
+    int q = 0;
+    for (int i = 0; i < poles.size(); i++) {
+      for (int k = 0; k < poles.get(i).multiplicity(); k++, q++) {
+        if (!settled[q]) {
+          return true;
+        }
+        double own = points.get(q).subtract(poles.get(i).s()).abs();
+        for (int j = 0; j < poles.size(); j++) {
+          double apart = poles.get(j).s().subtract(poles.get(i).s()).abs();
+          if (j != i && own > NEAR * apart) {
+            return true;
+          }
+        }
+      }
+    }
+    return false;
+  }
+
   /** g = Π(s − s_i) · det(1 + diag(ρ − 1) H) of one set of ratios; not thread-safe. */
   private final class Determinant {
     private final List<Ratio> ratios;
     private final double[][] m = new double[4][burners * burners];
     private final double[][] h = new double[4][burners]; // H by |j − k|
     private final double[] one = new double[4];
+    private double strength = 1;
 
     Determinant(List<Ratio> ratios) {
       this.ratios = ratios;
@@ -274,10 +316,10 @@ public final class FlameScatter {
       Complex s = new Complex(sr, si);
       for (int j = 0; j < n; j++) {
         Complex[] ratio = ratios.get(j).at(s);
-        double ar = ratio[0].getReal() - 1;
-        double ai = ratio[0].getImaginary();
-        double br = ratio[1].getReal();
-        double bi = ratio[1].getImaginary();
+        double ar = strength * (ratio[0].getReal() - 1);
+        double ai = strength * ratio[0].getImaginary();
+        double br = strength * ratio[1].getReal();
+        double bi = strength * ratio[1].getImaginary();
         for (int k = 0; k < n; k++) {
           int q = j * n + k;
           int d = Math.abs(j - k);
