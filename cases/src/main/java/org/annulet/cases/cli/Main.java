@@ -34,6 +34,7 @@ import picocli.CommandLine.UnmatchedArgumentException;
       SweepVerb.class,
       UncertaintyVerb.class,
       DampersVerb.class,
+      CompareVerb.class,
       MergeVerb.class,
       VerifyVerb.class
     })

@@ -58,11 +58,13 @@ enum CaseKeys {
   RESPONSE_PART("gain! delay!"),
   STAGING("burners! gain delay heat_share"),
   WINDOW("frequency! growth_rate azimuthal_orders"),
-  STUDIES("dampers sweep uncertainty"),
+  STUDIES("dampers sweep uncertainty compare"),
   UNCERTAINTY("samples seed inputs correlated burner_scatter"),
   SPREAD("normal uniform triangular"),
   CORRELATED("between! coefficient!"),
   BURNER_SCATTER("gain delay"),
+  COMPARE("tables match_within"),
+  COMPARED_TABLE("network_model measured shapes about"),
   SWEEP("along! across"),
   SWEEP_AXIS("name shown points set!"),
   DAMPER_STUDY("designs! positions! frequency"),
@@ -72,7 +74,7 @@ enum CaseKeys {
   VARIANT("name! about set!");
 
   /** Keys that a later version will read. */
-  static final List<String> RESERVED = List.of("accuracy", "uncertainty", "compare");
+  static final List<String> RESERVED = List.of("accuracy");
 
   private final List<String> all = new ArrayList<>();
   private final List<String> required = new ArrayList<>();

@@ -27,6 +27,7 @@ final class CsvTable {
       Pattern.compile("([A-Za-z][A-Za-z0-9_ ]*?)\\s*\\[([^\\]]*)\\]");
 
   private final Map<String, double[]> columns = new TreeMap<>();
+  private final List<Integer> lineNumbers = new ArrayList<>();
   private final Entry entry;
   private final String name;
 
@@ -180,6 +181,7 @@ final class CsvTable {
         }
       }
       rows.add(row);
+      lineNumbers.add(k + 1);
     }
     if (rows.isEmpty()) {
       entry.fault(name + " has no rows below its head", "add the values");
@@ -197,7 +199,13 @@ final class CsvTable {
     return Optional.of(this);
   }
 
-  private String place(int line) {
+  /** Line of the file, counted from 1, on which a row stands, counted from 0. */
+  int line(int row) {
+    return lineNumbers.get(row);
+  }
+
+  /** File and line in words. */
+  String place(int line) {
     return name + " line " + line;
   }
 }

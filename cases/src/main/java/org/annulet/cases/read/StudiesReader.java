@@ -28,7 +28,8 @@ final class StudiesReader {
     return new Studies(
         m.get("dampers").flatMap(this::dampers),
         m.get("sweep").flatMap(SweepReader::read),
-        m.get("uncertainty").flatMap(new UncertaintyReader(geometry, flames)::read));
+        m.get("uncertainty").flatMap(new UncertaintyReader(geometry, flames)::read),
+        m.get("compare").flatMap(CompareReader::read));
   }
 
   private Optional<DamperSearch> dampers(Entry entry) {

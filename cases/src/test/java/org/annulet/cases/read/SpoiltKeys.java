@@ -62,7 +62,31 @@ final class SpoiltKeys {
             18,
             "a bias flow needs 'loss_coefficient' and 'bias_velocity'",
             "give both"),
-        ring("walls:", "compare: {}\nwalls:", 18, "not supported in this version", "leave it out"),
+        ring("walls:", "accuracy: {}\nwalls:", 18, "not supported in this version", "leave it out"),
+        ring(
+            "walls:",
+            "compare: {}\nwalls:",
+            18,
+            "'compare' is a study and stands under 'studies'",
+            "studies: {compare: …}"),
+        ring(
+            "walls:",
+            "studies: {compare: {tables: {rig: {shapes: a.csv}}}}\nwalls:",
+            18,
+            "one of these keys is wanted: network_model, measured",
+            "add one"),
+        ring(
+            "walls:",
+            "studies: {compare: {table: {}}}\nwalls:",
+            18,
+            "unknown key 'table'",
+            "write 'tables'?"),
+        ring(
+            "walls:",
+            "studies: {compare: {tables: {rig: {measured: rig.csv}}}}\nwalls:",
+            18,
+            "file 'rig.csv' does not exist in the case folder",
+            ""),
         ring("walls:", "studies: {damper: {}}\nwalls:", 18, "unknown key 'damper'", "dampers"),
         ring(
             "walls:",
