@@ -141,7 +141,7 @@ final class Judge {
           .append(" %")
           .append(
               Math.abs(l.percent) > l.input.linearRange()
-                  ? " (far beyond the range in which this is linear)"
+                  ? " (beyond the range in which this is linear)"
                   : "");
     }
     return Optional.of(b + " would close it (linear, each alone)");

@@ -1,7 +1,6 @@
 package org.annulet.cases.study;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -12,9 +11,7 @@ import org.annulet.cases.read.Flame;
 import org.annulet.cases.read.Geometry;
 import org.annulet.cases.read.TwoPort;
 import org.annulet.mesher.mesh.Mesh;
-import org.annulet.solver.boundary.EdgeGas;
 import org.annulet.solver.boundary.ReactingWall;
-import org.annulet.solver.medium.Medium;
 import org.annulet.solver.network.DuctChain;
 import org.annulet.solver.network.DuctEnd;
 import org.annulet.solver.network.Heard;
@@ -29,13 +26,13 @@ import org.annulet.solver.operator.AnalyticFunction;
  */
 public final class ChainOfCase {
   private static final int SLICES = 10;
-  private static final double EVEN = 1e-3;
   private static final int SHEETS = 12;
   private static final int MOST_ORDERS = 30;
 
   private final CaseFile c;
   private final CaseProblem problem;
   private final ChainLinks links;
+  private final ChainGas gases;
   private final List<String> leftOut = new ArrayList<>();
   private final List<TreeMap<Double, Integer>> stations = new ArrayList<>();
 
@@ -68,6 +65,7 @@ public final class ChainOfCase {
     this.c = c;
     this.problem = problem;
     this.links = links;
+    this.gases = new ChainGas(c, problem, links);
   }
 
   /** The chain of a case, or why it cannot be one. */
@@ -108,7 +106,7 @@ public final class ChainOfCase {
       top = 0;
       for (int z = 0; z < links.links().size(); z++) {
         double cutOn =
-            gas(z, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY).soundSpeed()
+            gases.mean(z, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY).soundSpeed()
                 / (2 * Math.PI * links.links().get(z).radius());
         top = Math.max(top, (int) Math.ceil(1.2 * c.window().highestFrequency() / cutOn));
       }
@@ -162,7 +160,9 @@ public final class ChainOfCase {
       if (z + 1 < all.size()) {
         String joint = links.joints().get(z);
         if (nearField) {
-          step(all.get(z), all.get(z + 1), z).ifPresent(pieces::add);
+          new ChainStep(c, all.get(z), all.get(z + 1))
+              .inertia(gases.whole(z), gases.whole(z + 1))
+              .ifPresent(pieces::add);
         }
         Optional<TwoPort> port =
             c.twoPorts().stream().filter(p -> p.edge().equals(joint)).findFirst();
@@ -171,7 +171,7 @@ public final class ChainOfCase {
         }
         for (Flame f : c.flames()) {
           if (f.place() instanceof Flame.Sheet s && s.edge().equals(joint)) {
-            double mean = 0.5 * (expansion(z) + expansion(z + 1));
+            double mean = 0.5 * (gases.expansion(z) + gases.expansion(z + 1));
             sheets(f, mean, 1, pieces);
           }
         }
@@ -182,17 +182,7 @@ public final class ChainOfCase {
 
   private DuctEnd end(int z, String edge) {
     return new DuctEnd(
-        CaseWalls.solverWall(c, c.wall(edge)), whole(z), links.links().get(z).area());
-  }
-
-  private EdgeGas whole(int z) {
-    return gas(z, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
-  }
-
-  /** (γ−1)/(γp̄) of a zone. */
-  private double expansion(int z) {
-    double gamma = whole(z).gamma();
-    return (gamma - 1) / (gamma * c.gas().meanPressure());
+        CaseWalls.solverWall(c, c.wall(edge)), gases.whole(z), links.links().get(z).area());
   }
 
   /** The ducts of one zone, cut where gas, flames and references want it. */
@@ -203,7 +193,7 @@ public final class ChainOfCase {
     TreeMap<Double, List<Flame>> cuts = new TreeMap<>();
     cuts.put(from, new ArrayList<>());
     cuts.put(to, new ArrayList<>());
-    if (!even(z)) {
+    if (!gases.even(z)) {
       for (int k = 1; k < SLICES; k++) {
         cuts.put(from + link.length() * k / SLICES, new ArrayList<>());
       }
@@ -233,11 +223,12 @@ public final class ChainOfCase {
                         new SideWall(
                             (ReactingWall) CaseWalls.solverWall(c, c.wall(name)), perimeter)));
         pieces.add(
-            new Piece.Duct(x - before, link.area(), link.radius(), gas(z, before, x), walls));
+            new Piece.Duct(
+                x - before, link.area(), link.radius(), gases.mean(z, before, x), walls));
       }
       stations.get(z).put(x, pieces.size());
       for (Flame f : cut.getValue()) {
-        sheets(f, expansion(z), 1.0 / flamePlaces(f, z).size(), pieces);
+        sheets(f, gases.expansion(z), 1.0 / flamePlaces(f, z).size(), pieces);
       }
       before = x;
     }
@@ -263,7 +254,7 @@ public final class ChainOfCase {
       double moment = 0;
       for (int t = 0; t < mesh.triangleCount(); t++) {
         if (mesh.zoneNames().get(mesh.zone(t)).equals(link.zone())) {
-          double x = centre(mesh, t);
+          double x = ChainGas.centre(mesh, t);
           double y = (mesh.cornerY(t, 0) + mesh.cornerY(t, 1) + mesh.cornerY(t, 2)) / 3;
           double w = mesh.area(t) * brush.density().at(x, y);
           sum += w;
@@ -355,11 +346,11 @@ public final class ChainOfCase {
     if (Math.abs(p.directionX()) < 0.999 * Math.hypot(p.directionX(), p.directionY())) {
       throw new ChainLinks.NoChain("flame " + f.name() + " answers to a velocity across the duct");
     }
-    if (!at.containsKey(from) || !at.containsKey(to) || !even(z)) {
+    if (!at.containsKey(from) || !at.containsKey(to) || !gases.even(z)) {
       throw new ChainLinks.NoChain(
-          even(z) ? late : "the gas changes over the reference patch of flame " + f.name());
+          gases.even(z) ? late : "the gas changes over the reference patch of flame " + f.name());
     }
-    return new Heard.MeanVelocity(at.get(from), at.get(to), whole(z).density() * (to - from));
+    return new Heard.MeanVelocity(at.get(from), at.get(to), gases.whole(z).density() * (to - from));
   }
 
   private Piece coupling(TwoPort port, int z) throws ChainLinks.NoChain {
@@ -371,100 +362,9 @@ public final class ChainOfCase {
     }
     return new Piece.Coupling(
         CaseTwoPorts.solved(port, problem.shape().mesh(), problem.medium()),
-        whole(z),
-        whole(z + 1),
+        gases.whole(z),
+        gases.whole(z + 1),
         Math.min(a.area(), b.area()));
-  }
-
-  /**
-   * The inertia of a step as a long wave feels it: of a channel of height w that opens
-   * symmetrically into one of height P, α = w/P, an added length of the wide channel of (P/π) [ (1
-   * − α)²/(2α) ln((1 + α)/(1 − α)) + ln((1 + α)²/(4α)) ] (plane flow through a step, by conformal
-   * mapping; from memory of Miles 1946, checked against finite elements).
-   */
-  private Optional<Piece> step(ChainLinks.Link a, ChainLinks.Link b, int z) {
-    boolean narrowFirst = a.area() < b.area();
-    ChainLinks.Link wide = narrowFirst ? b : a;
-    ChainLinks.Link narrow = narrowFirst ? a : b;
-    double pitch;
-    double share;
-    if (c.geometry() instanceof Geometry.Ring ring) {
-      if (Double.isInfinite(a.radius()) == Double.isInfinite(b.radius())) {
-        return Optional.empty(); // steps of the gap have no near field in the unrolled plane
-      }
-      Geometry.RingZone ducts = ring.zone(Double.isInfinite(a.radius()) ? a.zone() : b.zone());
-      Geometry.RingZone annulus = ring.zone(Double.isInfinite(a.radius()) ? b.zone() : a.zone());
-      wide = Double.isInfinite(a.radius()) ? b : a;
-      pitch = 2 * Math.PI * annulus.meanRadius() / ring.burnerCount();
-      share =
-          ((Geometry.Ducts) ducts).bore() * ring.burnerCount() / (2 * Math.PI * ducts.meanRadius());
-    } else {
-      double height = wide.high() - wide.low();
-      share = (narrow.high() - narrow.low()) / height;
-      boolean flush =
-          Math.min(Math.abs(a.low() - b.low()), Math.abs(a.high() - b.high())) < 1e-6 * height;
-      pitch = flush ? 2 * height : height;
-    }
-    if (share > 0.999 || share <= 0) {
-      return Optional.empty();
-    }
-    double length =
-        pitch
-            / Math.PI
-            * (Math.pow(1 - share, 2) / (2 * share) * Math.log((1 + share) / (1 - share))
-                + Math.log(Math.pow(1 + share, 2) / (4 * share)));
-    EdgeGas gas = whole(wide == a ? z : z + 1);
-    return Optional.of(new Piece.Inertia(gas.density() * length / wide.area()));
-  }
-
-  private static double centre(Mesh mesh, int t) {
-    return (mesh.cornerX(t, 0) + mesh.cornerX(t, 1) + mesh.cornerX(t, 2)) / 3;
-  }
-
-  private boolean even(int z) {
-    Mesh mesh = problem.shape().mesh();
-    Medium medium = problem.medium();
-    int zone = mesh.zoneNames().indexOf(links.links().get(z).zone());
-    double[] speeds =
-        IntStream.range(0, mesh.triangleCount())
-            .filter(t -> mesh.zone(t) == zone)
-            .mapToDouble(medium::soundSpeed)
-            .toArray();
-    double low = java.util.Arrays.stream(speeds).min().orElse(1);
-    double high = java.util.Arrays.stream(speeds).max().orElse(1);
-    return high - low < EVEN * low;
-  }
-
-  /** Mean gas of a zone between two places: travel time and compressibility are kept. */
-  private EdgeGas gas(int z, double from, double to) {
-    Mesh mesh = problem.shape().mesh();
-    Medium medium = problem.medium();
-    int zone = mesh.zoneNames().indexOf(links.links().get(z).zone());
-    double area = 0;
-    double time = 0;
-    double soft = 0;
-    for (int t = 0; t < mesh.triangleCount(); t++) {
-      if (mesh.zone(t) == zone && centre(mesh, t) >= from && centre(mesh, t) <= to) {
-        area += mesh.area(t);
-        time += mesh.area(t) / medium.soundSpeed(t);
-        soft += mesh.area(t) / medium.bulkModulus(t);
-      }
-    }
-    if (area == 0) { // a slice thinner than the triangles
-      double middle = 0.5 * (from + to);
-      int t =
-          IntStream.range(0, mesh.triangleCount())
-              .filter(i -> mesh.zone(i) == zone)
-              .boxed()
-              .min(Comparator.comparingDouble(i -> Math.abs(centre(mesh, i) - middle)))
-              .orElseThrow();
-      area = 1;
-      time = 1 / medium.soundSpeed(t);
-      soft = 1 / medium.bulkModulus(t);
-    }
-    double speed = area / time;
-    double bulk = area / soft;
-    return new EdgeGas(bulk / (speed * speed), speed, bulk / c.gas().meanPressure());
   }
 
   /** What the chain is made of, for the reader. */

@@ -277,4 +277,26 @@ class CommandLineTest {
       return files.map(f -> f.getFileName().toString()).toList();
     }
   }
+
+  @Test
+  void compare_writesItsFiles_andSaysWhatAgrees() throws IOException {
+    Path at = duct(DUCT + "studies: {compare: {tables: {net: {network_model: net.csv}}}}\n");
+    Files.writeString(folder.resolve("net.csv"), "frequency [Hz]\n341\n700\n171\n");
+
+    ExitStatus status = run("compare", at.toString());
+
+    assertThat(status).isEqualTo(ExitStatus.DONE);
+    // Half waves at 170 and 340 Hz (row C1), here and in the chain of ducts.
+    assertThat(printed())
+        .contains("Network model: net: 2 matches, 0 within the bars")
+        .contains("outside the window")
+        .contains(
+            "One-dimensional chain of ducts made from the case: 2 matches, 2 within the bars");
+    assertThat(folder.resolve("out/compare.csv")).exists();
+    assertThat(folder.resolve("out/compare.json")).exists();
+    assertThat(folder.resolve("out/compare.html")).exists();
+    Files.writeString(folder.resolve("net.csv"), "frequency [Hz]\n-1\n");
+    assertThat(run("compare", at.toString())).isEqualTo(ExitStatus.INPUT_FAULT);
+    assertThat(complained()).contains("case.yaml:").contains("net.csv line 2");
+  }
 }

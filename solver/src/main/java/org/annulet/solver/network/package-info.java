@@ -24,8 +24,8 @@
  *
  * <p>Sources: transfer matrices of ducts, Munjal, Acoustics of Ducts and Mufflers, ch. 2; duct
  * waves of a thin annulus, Stow and Dowling, ASME GT2001-0037; both from memory, the equations are
- * derived from the wave equation and checked against rows C1, C10 to C13, D1 to D5 and D10 of the
- * reference values.
+ * derived from the wave equation and checked against rows C1, C10, C13, D1 to D3, D5, D10 and E1 of
+ * the reference values.
  *
  * <p>What it does not do: near fields at steps, waves across the duct, coupling of orders.
  */

@@ -160,6 +160,34 @@ class DuctChainTest {
   }
 
   @Test
+  void annulusWithFlame_hasItsAzimuthalModes_rowsD10() {
+    // k of the first azimuthal wave of the hard annulus 0.4 m to 0.5 m, row A2.1.25.1: as 1/R.
+    double k = 0.89069307 / 0.4;
+    for (int row = 0; row < 2; row++) {
+      Wall outlet = row == 0 ? new Rigid() : new Admittance(new Complex(0.015));
+      DuctChain can =
+          new DuctChain(
+              end(new Rigid(), 500, 1),
+              List.of(
+                  new Piece.Duct(0.1, 1, 1 / k, gas(500), List.of()),
+                  new Piece.Sheet(new Heard.Velocity(1, 1), 1, new NTau(1, 2.5e-3)),
+                  new Piece.Duct(0.2, 1, 1 / k, gas(850), List.of())),
+              end(outlet, 850, 1));
+      double[] expected =
+          row == 0
+              ? new double[] {
+                162.51837, -647.3712, 270.50530, 122.1043, 597.10577, -396.5831, 985.07932,
+                -528.6009
+              }
+              : new double[] {
+                162.02534, -642.9346, 271.23373, 106.1009, 598.47089, -396.7698, 987.30634,
+                -541.0866
+              };
+      roots(can, new Window(16, 1100, -900, 900), 1, expected);
+    }
+  }
+
+  @Test
   void sideWall_dampsAsTheSameAdmittanceSpreadOverTheVolume() {
     // Uniform along the duct: s² + s y P c/A + k² c² = 0, derived from κ² = −k².
     double y = 0.05;
