@@ -3,6 +3,7 @@ package org.annulet.cases.read;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import java.util.OptionalInt;
 import org.annulet.solver.modes.Window;
 
 /**
@@ -45,12 +46,14 @@ public record CaseFile(
    * Which files are written beside the tables.
    *
    * @param fieldFiles most modes whose field is written, those growing fastest first
+   * @param cycles most modes whose motion over one cycle is written, those growing fastest first;
+   *     empty for every mode that grows
    * @param shapesAlong edges along which mode shapes are tabulated; empty for the usual ones
    */
-  public record Outputs(int fieldFiles, List<String> shapesAlong) {
+  public record Outputs(int fieldFiles, OptionalInt cycles, List<String> shapesAlong) {
     /** Everything, as where the case says nothing. */
     static Outputs everything() {
-      return new Outputs(Integer.MAX_VALUE, List.of());
+      return new Outputs(Integer.MAX_VALUE, OptionalInt.of(1), List.of());
     }
   }
 

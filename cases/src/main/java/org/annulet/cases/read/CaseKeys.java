@@ -70,7 +70,7 @@ enum CaseKeys {
   DAMPER_STUDY("designs! positions! frequency"),
   DAMPER_DESIGN("resonator quarter_wave gas_of mouth_width count!"),
   DAMPER_POSITIONS("face! x! angles burners taken"),
-  OUTPUTS("field_files shapes_along"),
+  OUTPUTS("field_files cycles shapes_along"),
   VARIANT("name! about set!");
 
   /** Keys that a later version will read. */

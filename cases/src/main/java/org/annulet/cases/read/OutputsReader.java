@@ -3,6 +3,7 @@ package org.annulet.cases.read;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalInt;
 
 /** Reads {@code outputs}. */
 final class OutputsReader {
@@ -19,6 +20,7 @@ final class OutputsReader {
     Mapping m = Mapping.of(e, CaseKeys.OUTPUTS);
     return new CaseFile.Outputs(
         m.get("field_files").map(OutputsReader::fieldFiles).orElse(Integer.MAX_VALUE),
+        m.get("cycles").map(OutputsReader::cycles).orElse(OptionalInt.of(1)),
         m.get("shapes_along").map(this::lines).orElse(List.of()));
   }
 
@@ -35,6 +37,18 @@ final class OutputsReader {
       return 0;
     }
     return Integer.parseInt(text.get());
+  }
+
+  private static OptionalInt cycles(Entry cycles) {
+    String text = cycles.text().orElse("");
+    if (text.equals("growing")) {
+      return OptionalInt.empty();
+    }
+    if (!text.matches("[0-9]{1,6}")) {
+      cycles.fault("cycles is " + cycles.shown(), "write growing or a number, 0 for none");
+      return OptionalInt.of(0);
+    }
+    return OptionalInt.of(Integer.parseInt(text));
   }
 
   private List<String> lines(Entry entry) {

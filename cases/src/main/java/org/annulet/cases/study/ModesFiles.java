@@ -6,7 +6,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Optional;
+import java.util.Locale;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.annulet.cases.read.CaseFile;
@@ -80,16 +80,30 @@ public final class ModesFiles {
     boolean ring = chamber.kind() == GeometryKind.RING;
     Surface surface = ring ? Surface.wrapped(mesh, chamber.zoneRadii()) : Surface.flat(mesh);
     new ModeFiles(folder, chamber, surface).modes("mode", views);
-    Optional<ModeEntry> worst =
-        answer.results().modes().stream()
-            .max(Comparator.comparingDouble(e -> e.view().mode().growthRate()));
-    if (worst.isPresent() && most > 0 && mesh.nodeCount() <= MOST_CYCLE_NODES) {
-      new ModeFiles(folder, chamber, surface).cycle("cycle", worst.get().view(), CYCLE_FRAMES);
+    if (most > 0 && mesh.nodeCount() <= MOST_CYCLE_NODES) {
+      cycles(new ModeFiles(folder, chamber, surface), answer);
     }
     if (chamber.kind() == GeometryKind.SECTION
         && (long) mesh.nodeCount() * SWEPT_FACETS < MOST_SWEPT_POINTS) {
       new ModeFiles(folder, chamber, Surface.swept(mesh, 2 * Math.PI, SWEPT_FACETS))
           .modes("swept", views);
+    }
+  }
+
+  /** The motion over one cycle of the modes that grow fastest. */
+  private static void cycles(ModeFiles files, ModesStudy.Answer answer) throws IOException {
+    List<ModeEntry> modes = answer.results().modes();
+    long growing = modes.stream().filter(e -> e.stability() == ModeEntry.Stability.GROWS).count();
+    List<Integer> chosen =
+        IntStream.range(0, modes.size())
+            .boxed()
+            .sorted(Comparator.comparingDouble(i -> -modes.get(i).view().mode().growthRate()))
+            .limit(answer.caseFile().outputs().cycles().orElse((int) growing))
+            .toList();
+    for (int i : chosen) {
+      boolean first = i == chosen.get(0);
+      String stem = first ? "cycle" : String.format(Locale.ROOT, "cycle-of-mode-%02d", i + 1);
+      files.cycle(stem, modes.get(i).view(), CYCLE_FRAMES);
     }
   }
 
@@ -144,7 +158,12 @@ public final class ModesFiles {
     try (Stream<Path> files = Files.list(folder)) {
       old =
           files
-              .filter(f -> f.getFileName().toString().matches("(mode|swept|cycle)-\\d+\\.vtu"))
+              .filter(
+                  f ->
+                      f.getFileName()
+                          .toString()
+                          .matches(
+                              "(mode|swept|cycle(-of-mode-\\d+)?)-\\d+\\.vtu|cycle(-of-mode-\\d+)?\\.pvd"))
               .toList();
     }
     for (Path f : old) {

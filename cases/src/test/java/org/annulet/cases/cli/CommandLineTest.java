@@ -82,6 +82,23 @@ class CommandLineTest {
     assertThat(printed()).contains("does not clear an engine to run");
   }
 
+  /** Of no mode, of one, of two: and nothing of an earlier run is left. */
+  @Test
+  void cycles_areWrittenOfAsManyModesAsAsked() throws IOException {
+    Path results = folder.resolve("results");
+    run("modes", duct(DUCT + "outputs: {cycles: 2}\n").toString(), "--out", results.toString());
+    assertThat(names(results))
+        .contains("cycle.pvd", "cycle-011.vtu")
+        .filteredOn(n -> n.matches("cycle-of-mode-0[12]\\.pvd"))
+        .hasSize(1);
+    run("modes", duct(DUCT).toString(), "--out", results.toString());
+    assertThat(names(results)).contains("cycle.pvd").noneMatch(n -> n.contains("of-mode"));
+    // nothing grows in a closed duct without a flame
+    run("modes", duct(DUCT + "outputs: {cycles: growing}\n").toString(), "--out", results + "");
+    assertThat(names(results)).noneMatch(n -> n.contains("cycle")).contains("mode.pvd");
+    assertThat(complained()).isEmpty();
+  }
+
   @Test
   void sameCaseTwice_sameBytes() throws IOException {
     duct(DUCT);

@@ -58,7 +58,7 @@ class ReadingCasesTest {
           reference_velocity: 5 m/s
           response: {gain: 1, delay: 1 ms}
       window: {frequency: 1 kHz}
-      outputs: {field_files: 6}
+      outputs: {field_files: 6, cycles: growing}
       """;
 
   private static final String CROSS =
@@ -96,6 +96,7 @@ class ReadingCasesTest {
     assertThat(plane.outline().zones().get("cold").holes()).containsExactly(List.of("pin"));
     assertThat(plane.meshSize().local()).isEqualTo(Map.of("flame", 0.004, "back", 0.005));
     assertThat(c.outputs().fieldFiles()).isEqualTo(6);
+    assertThat(c.outputs().cycles()).isEmpty();
     assertThat(c.azimuthalOrders()).isEmpty();
     assertThat(c.window().lowestFrequency()).isCloseTo(20, within(1e-12));
     assertThat(c.window().lowestGrowth()).isEqualTo(-1000);

@@ -14,6 +14,12 @@ final class SpoiltKeys {
         // keys
         ring("annulet: 1", "annulet: 2", 1, "format '2'", "annulet: 1"),
         ring("title: ring\n", "", 1, "the key 'title' is missing", "title"),
+        ring(
+            "window:",
+            "outputs: {cycles: all}\nwindow:",
+            31,
+            "cycles is 'all'",
+            "write growing or a number, 0 for none"),
         ring("window:", "windows:", 31, "unknown key 'windows'", "write 'window'?"),
         ring(
             "  burner_count: 14",
