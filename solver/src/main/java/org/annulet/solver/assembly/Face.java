@@ -13,7 +13,7 @@ public enum Face {
     this.shift = shift;
   }
 
-  public double radius(Ring.Annulus zone) {
+  double radius(Ring.Annulus zone) {
     return zone.meanRadius() + shift * zone.gap();
   }
 }
