@@ -3,6 +3,7 @@ package org.annulet.cases.compare;
 import java.util.List;
 import java.util.Locale;
 import org.annulet.cases.read.ModeTable;
+import org.annulet.post.chart.Svg;
 
 /** Both sides in the plane of frequency and growth rate. */
 final class ComparisonChart {
@@ -33,18 +34,21 @@ final class ComparisonChart {
         String.format(
             Locale.ROOT,
             "<svg xmlns=\"http://www.w3.org/2000/svg\" viewBox=\"0 0 %.0f %.0f\" role=\"img\""
-                + " aria-label=\"Growth rate over frequency of both sides\" font-size=\"12\""
+                + " aria-label=\"Growth rate over frequency of both sides\" font-size=\"12\" font-family=\"system-ui,sans-serif\""
                 + " fill=\"currentColor\">",
             WIDE,
             HIGH));
-    double zero = y(box, 0);
-    b.append(stroke(EDGE, zero, WIDE - 10, zero, "0.5"));
-    for (int k = 0; k <= 4; k++) {
-      double f = box[0] + df + (box[1] - box[0] - 2 * df) * k / 4;
-      double g = box[2] + dg + (box[3] - box[2] - 2 * dg) * k / 4;
-      b.append(text(x(box, f), HIGH - 22, "middle", String.format(Locale.ROOT, "%.0f", f)));
-      b.append(text(EDGE - 6, y(box, g) + 4, "end", String.format(Locale.ROOT, "%.0f", g)));
+    double fs = Svg.step(box[1] - box[0], 8);
+    for (double f = Math.ceil(box[0] / fs) * fs; f <= box[1]; f += fs) {
+      b.append(rule(x(box, f), 18, x(box, f), HIGH - 42));
+      b.append(text(x(box, f), HIGH - 24, "middle", Svg.tick(f, fs)));
     }
+    double gs = Svg.step(box[3] - box[2], 6);
+    for (double g = Math.ceil(box[2] / gs) * gs; g <= box[3]; g += gs) {
+      b.append(rule(EDGE, y(box, g), WIDE - 10, y(box, g)));
+      b.append(text(EDGE - 6, y(box, g) + 4, "end", Svg.tick(g, gs)));
+    }
+    b.append(stroke(EDGE, y(box, 0), WIDE - 10, y(box, 0), "1"));
     b.append(text(WIDE / 2, HIGH - 4, "middle", "frequency in Hz"));
     b.append(text(EDGE - 40, 12, "start", "growth rate in 1/s"));
     for (Line l : lines) {
@@ -99,6 +103,16 @@ final class ComparisonChart {
         y,
         style.isEmpty() ? "3" : "6",
         style);
+  }
+
+  private static String rule(double x1, double y1, double x2, double y2) {
+    return String.format(
+        Locale.ROOT,
+        "<line x1=\"%.1f\" y1=\"%.1f\" x2=\"%.1f\" y2=\"%.1f\" stroke=\"var(--rule,#ddd)\"/>",
+        x1,
+        y1,
+        x2,
+        y2);
   }
 
   private static String stroke(double x1, double y1, double x2, double y2, String width) {

@@ -44,7 +44,7 @@ public final class Svg {
   }
 
   /** A round step that divides a span into at most {@code most} parts: 1, 2 or 5 times a power. */
-  static double step(double span, int most) {
+  public static double step(double span, int most) {
     double raw = span / most;
     double power = Math.pow(10, Math.floor(Math.log10(raw)));
     double f = raw / power;
@@ -52,7 +52,7 @@ public final class Svg {
   }
 
   /** A tick's number without needless decimals. */
-  static String tick(double v, double step) {
+  public static String tick(double v, double step) {
     int decimals = (int) Math.max(0, -Math.floor(Math.log10(step) + 1e-9));
     String s = String.format(Locale.ROOT, "%." + decimals + "f", v);
     return (s.matches("-0(\\.0*)?") ? s.substring(1) : s).replace('-', '−');
