@@ -62,6 +62,7 @@ final class CompareSentences {
           .append(Numbers.fixed(growth, growth < 10 ? 2 : 0))
           .append(" 1/s");
     }
+    corrected(c).ifPresent(b::append);
     count(c, Line.Verdict.ONLY_HERE, " only here").ifPresent(b::append);
     count(c, Line.Verdict.ONLY_THERE, " only there").ifPresent(b::append);
     count(c, Line.Verdict.AMBIGUOUS, " ambiguous").ifPresent(b::append);
@@ -69,6 +70,24 @@ final class CompareSentences {
       b.append("; ").append(signs).append(" on the other side of stability");
     }
     return b.append('.').toString();
+  }
+
+  /** What is left of the frequency differences when near fields are added to the chain. */
+  private static Optional<String> corrected(Compared c) {
+    double worst = -1;
+    for (Line l : c.lines()) {
+      if (l.match().both() && l.nearField().isPresent()) {
+        double left = Math.abs(l.frequencyDifference() + l.nearField().get()[0]);
+        worst = Math.max(worst, left / l.match().ours().orElseThrow().frequency());
+      }
+    }
+    return worst < 0
+        ? Optional.empty()
+        : Optional.of(
+            String.format(
+                Locale.ROOT,
+                " (frequencies by %.2g %% at most once the near field at its steps is added by estimate)",
+                100 * worst));
   }
 
   private static Optional<String> count(Compared c, Line.Verdict verdict, String words) {

@@ -166,12 +166,34 @@ public final class CompareStudy {
               mode.growthRate(),
               e.view().growthError(),
               order == null ? -1 : order,
-              e.label().partner() < 0 ? 0 : e.label().partner() + offset,
+              partner(in ? inside : outside, e) < 0
+                  ? 0
+                  : partner(in ? inside : outside, e) + offset,
               e.label().text(),
               in,
               shapes.of(e)));
     }
     return all;
+  }
+
+  /**
+   * Index of the other member of a pair; on a section that is the wave that turns the other way.
+   */
+  private static int partner(List<ModeEntry> all, ModeEntry e) {
+    if (e.label().partner() >= 0 || e.view().order() == null || e.view().order() == 0) {
+      return e.label().partner();
+    }
+    for (int k = 0; k < all.size(); k++) {
+      ModeEntry o = all.get(k);
+      if (o != e
+          && o.view().order() != null
+          && o.view().order() == -e.view().order()
+          && o.view().mode().frequency() == e.view().mode().frequency()
+          && o.view().mode().growthRate() == e.view().mode().growthRate()) {
+        return k;
+      }
+    }
+    return -1;
   }
 
   /** Modes of the chain, and what near fields move each of them by. */

@@ -140,7 +140,18 @@ public final class ChainOfCase {
       }
     }
     if (c.geometry() instanceof Geometry.Section) {
-      all.add("the curvature of the gap (waves round run at its mean radius) and waves across it");
+      double widest =
+          links.links().stream()
+              .filter(l -> Double.isFinite(l.radius()))
+              .mapToDouble(l -> Math.pow((l.high() - l.low()) / l.radius(), 2) / 24)
+              .max()
+              .orElse(0);
+      all.add(
+          String.format(
+              Locale.ROOT,
+              "waves across the gap, and its curvature: waves round run at its mean radius, which"
+                  + " moves azimuthal modes by up to about %.2g %%",
+              100 * widest));
       if (links.links().stream().anyMatch(l -> l.low() <= 0)
           && c.azimuthalOrders().stream().anyMatch(m -> m > 0)) {
         all.add("azimuthal orders above 0, for a zone reaches the axis");
