@@ -8,6 +8,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.FileSystemException;
 import org.annulet.cases.read.CaseFaultException;
 import org.annulet.cases.read.Problem;
+import org.annulet.solver.eigen.MemoryLimitException;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Model.CommandSpec;
@@ -119,6 +120,10 @@ public final class Main implements Runnable {
               + ": "
               + reason
               + "\n    mend: make room, or give a folder that can be written with --out");
+      return ExitStatus.OUT_OF_RESOURCES;
+    }
+    if (e instanceof MemoryLimitException) {
+      console.fault("annulet: " + e.getMessage());
       return ExitStatus.OUT_OF_RESOURCES;
     }
     if (e instanceof IOException) {

@@ -41,10 +41,16 @@ public final class PreparedOperator {
     return operator;
   }
 
-  /** The analysis of its pattern. */
+  /**
+   * The analysis of its pattern.
+   *
+   * @throws MemoryLimitException if a factor will not fit into memory
+   */
   public synchronized SymmetricAnalysis analysis() {
     if (analysis == null) {
-      analysis = SparseSolver.analyse(operator.pattern(), operator.coordinates());
+      SymmetricAnalysis made = SparseSolver.analyse(operator.pattern(), operator.coordinates());
+      MemoryLimitException.check(made, Runtime.getRuntime().maxMemory());
+      analysis = made;
     }
     return analysis;
   }
