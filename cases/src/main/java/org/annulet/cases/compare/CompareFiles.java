@@ -285,7 +285,7 @@ public final class CompareFiles {
       if (c.side() == Side.CHAIN) {
         ChainOfCase.Chain chain = answer.chain().chain().orElseThrow();
         page.paragraph(CompareSentences.leftOut(chain));
-        ChainOfCase.words(chain).forEach(page::paragraph);
+        ChainWords.of(chain).forEach(page::paragraph);
       }
     }
     page.part("How they were matched")

@@ -377,28 +377,4 @@ public final class ChainOfCase {
         gases.whole(z + 1),
         Math.min(a.area(), b.area()));
   }
-
-  /** What the chain is made of, for the reader. */
-  public static List<String> words(Chain chain) {
-    List<String> out = new ArrayList<>();
-    double x = chain.start();
-    for (Piece p : chain.plain().pieces()) {
-      if (p instanceof Piece.Duct d) {
-        out.add(
-            String.format(
-                Locale.ROOT,
-                "duct from x = %.1f to %.1f mm, area %.4g m², c = %.1f m/s, ρ = %.3f kg/m³%s",
-                1e3 * x,
-                1e3 * (x + d.length()),
-                d.area(),
-                d.gas().soundSpeed(),
-                d.gas().density(),
-                Double.isInfinite(d.radius())
-                    ? ""
-                    : String.format(Locale.ROOT, ", mean radius %.1f mm", 1e3 * d.radius())));
-        x += d.length();
-      }
-    }
-    return out;
-  }
 }
