@@ -224,7 +224,7 @@ final class ScatterEngine implements Engine {
 
   @Override
   public Sample at(double... x) {
-    Complex[][] roots = condensed.roots(ratios(x));
+    Complex[][] roots = condensed.roots(caseFile.window(), ratios(x));
     List<Complex> found = new ArrayList<>();
     boolean all = certified;
     for (int[] m : members) {

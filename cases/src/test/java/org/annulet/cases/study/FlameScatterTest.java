@@ -75,7 +75,7 @@ class FlameScatterTest {
     }
 
     List<Complex> found = new ArrayList<>();
-    for (Complex[] members : scatter.roots(ratios)) {
+    for (Complex[] members : scatter.roots(window, ratios)) {
       found.addAll(List.of(members));
     }
 

@@ -213,11 +213,13 @@ public final class FlameScatter {
   /**
    * The eigenvalues with scatter.
    *
+   * @param wanted where it matters which eigenvalue has become which: one from there that ends far
+   *     from where it began is followed in steps
    * @param ratios ρ_j of each burner
    * @return in the order of {@link #poles()}, the members of each by growth rate, largest first;
    *     NaN where one was lost
    */
-  public Complex[][] roots(List<Ratio> ratios) {
+  public Complex[][] roots(Window wanted, List<Ratio> ratios) {
     if (ratios.size() != burners) {
       throw new IllegalArgumentException(ratios.size() + " ratios for " + burners + " burners");
     }
@@ -226,7 +228,7 @@ public final class FlameScatter {
     List<Complex> start = startPoints();
     boolean[] settled = new boolean[start.size()];
     List<Complex> points = iteration.run(start, STEPS, settled);
-    if (strayed(points, settled)) {
+    if (strayed(wanted, points, settled)) {
       points = start;
       for (int k = 1; k <= PATH; k++) {
         determinant.strength = (double) k / PATH;
@@ -267,15 +269,17 @@ public final class FlameScatter {
    * Whether some root is lost or so far from where it began, compared with the other poles, that it
    * may belong to another.
    */
-  private boolean strayed(List<Complex> points, boolean[] settled) {
+  private boolean strayed(Window wanted, List<Complex> points, boolean[] settled) {
     int q = 0;
     for (int i = 0; i < poles.size(); i++) {
       for (int k = 0; k < poles.get(i).multiplicity(); k++, q++) {
         if (!settled[q]) {
           return true;
         }
-        double own = points.get(q).subtract(poles.get(i).s()).abs();
-        for (int j = 0; j < poles.size(); j++) {
+        Complex from = poles.get(i).s();
+        boolean counts = wanted.contains(from.getReal(), from.getImaginary() / (2 * Math.PI));
+        double own = points.get(q).subtract(from).abs();
+        for (int j = 0; counts && j < poles.size(); j++) {
           double apart = poles.get(j).s().subtract(poles.get(i).s()).abs();
           if (j != i && own > NEAR * apart) {
             return true;
