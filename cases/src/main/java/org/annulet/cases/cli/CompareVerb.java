@@ -5,6 +5,7 @@ import java.nio.file.Path;
 import org.annulet.cases.compare.CompareFiles;
 import org.annulet.cases.compare.CompareStudy;
 import org.annulet.cases.read.CaseFile;
+import org.annulet.post.files.WholeFile;
 import picocli.CommandLine.Command;
 
 /** {@code annulet compare CASE}. */
@@ -15,6 +16,7 @@ import picocli.CommandLine.Command;
 final class CompareVerb extends Verb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
+    WholeFile.prepare(folder);
     CompareStudy.Result result =
         new CompareStudy(caseFile, console().progress()).run(Version.number());
     CompareFiles.write(folder, result, Version.number());

@@ -5,6 +5,7 @@ import java.nio.file.Path;
 import org.annulet.cases.read.CaseFile;
 import org.annulet.cases.uncertainty.UncertaintyFiles;
 import org.annulet.cases.uncertainty.UncertaintyStudy;
+import org.annulet.post.files.WholeFile;
 import picocli.CommandLine.Command;
 
 /** {@code annulet uncertainty CASE}. */
@@ -14,6 +15,7 @@ import picocli.CommandLine.Command;
 final class UncertaintyVerb extends PointsVerb {
   @Override
   ExitStatus run(CaseFile caseFile, Path folder) throws IOException {
+    WholeFile.prepare(folder);
     UncertaintyStudy study = new UncertaintyStudy(caseFile, Version.text(), console().progress());
     study.compute(folder, part());
     return part().isWhole() ? finish(study, folder, console()) : partDone(folder);
