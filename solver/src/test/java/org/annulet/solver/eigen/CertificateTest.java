@@ -113,6 +113,28 @@ class CertificateTest {
     assertThat(damaged.certain()).isFalse();
   }
 
+  @Test
+  void rootJustInsideTheContour_leavesNoAnswer() {
+    PreparedOperator duct = strongFlame();
+    double[][] basis =
+        new SearchPlan(duct, WINDOW, SearchSettings.standard())
+            .basis(Rectangle.of(WINDOW).top(), 3)
+            .columns();
+    ModeSet modes = ModeSearch.find(duct, WINDOW, SearchSettings.standard());
+    double second = 2 * Math.PI * modes.modes().get(1).frequency();
+    RootCount.Fineness fine = new RootCount.Fineness(200, 4000);
+    Rectangle all = Rectangle.of(WINDOW);
+    // a thousandth of its height above the second mode, within the band that must be free
+    double top = second + 0.001 * (second - all.bottom());
+    Rectangle contour = new Rectangle(all.left(), all.right(), all.bottom(), top);
+
+    ReducedCount.Result result =
+        new ReducedCount(duct, basis)
+            .inside(contour, new RootCount.Known(List.of(), List.of()), fine);
+
+    assertThat(result.certain()).isFalse();
+  }
+
   private static double[][] half(double[][] q) {
     double[][] half = new double[q.length / 2][];
     Arrays.setAll(half, i -> q[2 * i + 1]);
